@@ -1,0 +1,6 @@
+namespace Dotcoat;
+
+internal static class Program
+{
+    private static int Main() => 0;
+}
