@@ -156,10 +156,12 @@ internal sealed class RowReader
     // Where the field's text begins in its line, in characters from 1.
     private static int TextColumn(CsvReader reader, int field)
     {
-        ReadOnlySpan<byte> record = reader.RawRecord, raw = reader.GetRawSpan(field);
-        int start = record.Overlaps(raw, out int offset) ? offset : record.Length;
+        ReadOnlySpan<byte> record = reader.RawRecord;
+        int start = 0;
+        for (int i = 0; i < field; i++)
+            start += reader.GetRawSpan(i).Length + 1;
         while (start < record.Length && record[start] is (byte)' ')
             start++;
-        return Encoding.UTF8.GetCharCount(record[..start]) + 1;
+        return Encoding.UTF8.GetCharCount(record[..Math.Min(start, record.Length)]) + 1;
     }
 }
