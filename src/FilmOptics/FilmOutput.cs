@@ -36,6 +36,9 @@ public sealed record FilmOutput
     /// <summary>Accuracy asked for and reached, for models that have one.</summary>
     public SolverAccuracy? Accuracy { get; init; }
 
+    /// <summary>Photons traced and standard errors, for models that trace.</summary>
+    public TracingStatistics? Tracing { get; init; }
+
     /// <summary>All light leaving above, photons per source photon in each 1 nm bin.</summary>
     public Spectrum<PhotonPerNm> Total
     {
