@@ -1,0 +1,219 @@
+using Colorimetry;
+
+namespace FilmOptics.Reading;
+
+/// <summary>Brings the spectra that a film file names onto the grid. Each file is read once.</summary>
+internal sealed class SpectrumLoader(string folder, FaultList faults, List<string> warnings)
+{
+    // Where light is below this share of its peak, nothing has to be known about what it meets.
+    private const double LightShare = 1e-3;
+
+    private readonly Dictionary<string, SpectrumTable?> _tables = [];
+    private (double FromNm, double ToNm)? _lightNm;
+
+    /// <summary>Every scalar that named a file.</summary>
+    public List<ScalarNode> FileNames { get; } = [];
+
+    /// <summary>Says where there is light, which absorbance, transmittance and reflectance have to cover.</summary>
+    /// <param name="lights">Source and emissions; null for those with a fault.</param>
+    public void SetLight(IEnumerable<Spectrum<PhotonPerNm>?> lights)
+    {
+        var ranges = lights.OfType<Spectrum<PhotonPerNm>>().Select(RangeNm).ToList();
+        _lightNm = ranges.Count == 0 ? null : (ranges.Min(range => range.FromNm), ranges.Max(range => range.ToNm));
+    }
+
+    /// <summary>Light or emission, normalised to one photon; null with a fault.</summary>
+    public Spectrum<PhotonPerNm>? Light(Node value, string key, SpectrumKind kind, double shiftNm)
+    {
+        if (SpectrumReference.Read(value, key, kind, faults) is not { } reference || Table(reference) is not { } table)
+            return null;
+        reference = reference.ShiftedBy(shiftNm);
+        if (Column(reference, table, kind) is not { } column)
+            return null;
+        var photons = column == "power_per_nm"
+            ? Import<WattPerNm>(reference, table, column)?.ToPhotons()
+            : Import<PhotonPerNm>(reference, table, column);
+        if (photons is null || photons.Integral > 0)
+            return photons?.NormalisedToUnitSum();
+        faults.Add(reference.File.Place, $"{key}: {Shown.Quoted(reference.File.Text)} does not integrate: it is 0 at every wavelength; a light is above 0 somewhere.");
+        return null;
+    }
+
+    /// <summary>A spectrum that has to cover the light; null with a fault.</summary>
+    public Spectrum<TUnit>? Spectrum<TUnit>(Node value, string key, SpectrumKind kind)
+        where TUnit : struct, ISpectralUnit =>
+        SpectrumReference.Read(value, key, kind, faults) is { } reference && Table(reference) is { } table && Column(reference, table, kind) is { } column
+            ? Import<TUnit>(reference, table, column)
+            : null;
+
+    /// <summary>A number for all wavelengths or a spectrum file; 0 where the key is absent; null with a fault.</summary>
+    public Spectrum<TUnit>? NumberOrSpectrum<TUnit>(Section section, string key, NumberRule rule, SpectrumKind kind)
+        where TUnit : struct, ISpectralUnit
+    {
+        var value = section.Find(key);
+        if (value is null)
+            return Colorimetry.Spectrum.Flat<TUnit>(0, "film file");
+        if (value is not MappingNode && !IsFileName(value))
+        {
+            double number = section.NumberOf(value, key, rule with { Words = $"{rule.Words}, or a spectrum file" });
+            return double.IsNaN(number) ? null : Colorimetry.Spectrum.Flat<TUnit>(number, "film file");
+        }
+
+        return Spectrum<TUnit>(value, section.PathOf(key), kind);
+    }
+
+    /// <summary>True where a file is named and its first column holds angles.</summary>
+    public bool IsByAngle(Node? value)
+    {
+        var name = value is MappingNode mapping ? mapping.Find("file")?.Value : value;
+        return name is ScalarNode scalar && IsFileName(scalar) && File.Exists(PathOf(scalar)) && Table(PathOf(scalar))?.FirstColumn == "angle_deg";
+    }
+
+    /// <summary>A table over the polar angle; null with a fault.</summary>
+    public AngleTable? ByAngle(Node value, string key, SpectrumKind kind, string column)
+    {
+        if (FileOnly(value, key, kind) is not { } reference || Table(reference) is not { } table)
+            return null;
+        if (table.FirstColumn != "angle_deg" || !Has(table, column))
+            return Refused<AngleTable>(reference, table, $"angle_deg, {column}");
+        var angles = table.WavelengthsNm;
+        var values = table.Values(column);
+        for (int i = 0; i < angles.Length; i++)
+        {
+            if (angles[i] is < 0 or > 90)
+                faults.Add(new InputFault(table.Name, table.LineOf(i), null, $"The angle is {Shown.Number(angles[i])}; 0 to 90 degrees is allowed."));
+            if (values[i] < 0 || (column == "reflectance" && values[i] > 1))
+                faults.Add(new InputFault(table.Name, table.LineOf(i), null, $"{column} is {Shown.Number(values[i])} at {Shown.Number(angles[i])} degrees; {(column == "reflectance" ? "0 to 1" : "at least 0")} is allowed."));
+        }
+
+        if (angles.Length < 2)
+            faults.Add(new InputFault(table.Name, table.LineOf(0), null, "There is one angle; two or more are needed."));
+        return faults.Any ? null : new(angles, values, table.Name);
+    }
+
+    /// <summary>The three filters of a panel; null with a fault.</summary>
+    public (Spectrum<Fraction> Red, Spectrum<Fraction> Green, Spectrum<Fraction> Blue)? Filters(Node value, string key)
+    {
+        if (SpectrumReference.Read(value, key, SpectrumKind.Filters, faults) is not { } reference || Table(reference) is not { } table)
+            return null;
+        if (table.FirstColumn != "wavelength_nm" || !SpectrumKind.Filters.Columns.All(column => Has(table, column)))
+        {
+            Refused<Panel>(reference, table, "wavelength_nm, red, green, blue");
+            return null;
+        }
+
+        var red = Import<Fraction>(reference, table, "red");
+        var green = Import<Fraction>(reference, table, "green");
+        var blue = Import<Fraction>(reference, table, "blue");
+        return red is null || green is null || blue is null ? null : (red, green, blue);
+    }
+
+    /// <summary>An observer by name or from a file; null with a fault.</summary>
+    public StandardObserver? Observer(Node value, string key)
+    {
+        var known = new[] { StandardObserver.Cie1931, StandardObserver.Cie1964 };
+        if (value is ScalarNode { IsNull: false } name)
+        {
+            if (Array.Find(known, observer => observer.Name == name.Text) is { } standard)
+                return standard;
+            if (!name.Text.Contains('.', StringComparison.Ordinal))
+            {
+                faults.Add(value.Place, $"{key} is {name.Described}; allowed is {string.Join(", ", known.Select(observer => observer.Name))} or a CSV file (nearest: {Shown.Nearest(name.Text, known.Select(observer => observer.Name))}).");
+                return null;
+            }
+        }
+
+        if (FileOnly(value, key, SpectrumKind.Observer) is not { } reference || Table(reference) is not { } table)
+            return null;
+        if (table.FirstColumn != "wavelength_nm" || !SpectrumKind.Observer.Columns.All(column => Has(table, column)))
+            return Refused<StandardObserver>(reference, table, "wavelength_nm, x_bar, y_bar, z_bar");
+        return Guarded(() => StandardObserver.FromTable(table));
+    }
+
+    private static (double FromNm, double ToNm) RangeNm(Spectrum<PhotonPerNm> light)
+    {
+        double least = LightShare * light.Peak;
+        int first = 0, last = WavelengthGrid.Count - 1;
+        while (light.Samples[first] < least)
+            first++;
+        while (light.Samples[last] < least)
+            last--;
+        return (WavelengthGrid.NmAt(first), WavelengthGrid.NmAt(last));
+    }
+
+    private static bool IsFileName(Node value) =>
+        value is ScalarNode { IsNull: false } name && !Section.TryNumber(name, out _) && name.Text.Contains('.', StringComparison.Ordinal)
+        && !name.Text.All(c => char.IsAsciiDigit(c) || c is '.' or ',' or '-' or '+');
+
+    private SpectrumReference? FileOnly(Node value, string key, SpectrumKind kind)
+    {
+        if (value is not MappingNode mapping)
+            return SpectrumReference.Read(value, key, kind, faults);
+        var section = new Section(mapping, key, faults);
+        var file = section.Required("file");
+        section.Close();
+        return file is null ? null : SpectrumReference.Read(file, section.PathOf("file"), kind, faults);
+    }
+
+    private static bool Has(SpectrumTable table, string column) => table.Columns.Contains(column, StringComparer.Ordinal);
+
+    private string PathOf(ScalarNode name) => Path.Combine(folder, name.Text);
+
+    private SpectrumTable? Table(SpectrumReference reference)
+    {
+        FileNames.Add(reference.File);
+        string path = PathOf(reference.File);
+        if (File.Exists(path))
+            return Table(path);
+        string found = Directory.Exists(path) ? "is a folder" : $"is not there (looked for {path})";
+        faults.Add(reference.File.Place, $"{reference.Key}: the file {Shown.Quoted(reference.File.Text)} {found}; a spectrum file is due.");
+        return null;
+    }
+
+    private SpectrumTable? Table(string path)
+    {
+        if (!_tables.TryGetValue(path, out var table))
+            _tables[path] = table = Guarded(() => SpectrumFile.Read(path));
+        return table;
+    }
+
+    private string? Column(SpectrumReference reference, SpectrumTable table, SpectrumKind kind)
+    {
+        string[] fitting = [.. kind.Columns.Where(column => Has(table, column) && (reference.Column ?? column) == column)];
+        if (table.FirstColumn == "wavelength_nm" && fitting.Length == 1)
+            return fitting[0];
+        return fitting.Length > 1
+            ? Refused<string>(reference, table, $"column: {string.Join(" or column: ", fitting)} beside file:")
+            : Refused<string>(reference, table, $"wavelength_nm and {reference.Column ?? string.Join(" or ", kind.Columns)}");
+    }
+
+    private T? Refused<T>(SpectrumReference reference, SpectrumTable table, string due)
+        where T : class
+    {
+        faults.Add(reference.File.Place, $"{reference.Key}: {Shown.Quoted(reference.File.Text)} has the columns {table.FirstColumn}, {string.Join(", ", table.Columns)}; due is {due}.");
+        return null;
+    }
+
+    private Spectrum<TUnit>? Import<TUnit>(SpectrumReference reference, SpectrumTable table, string column)
+        where TUnit : struct, ISpectralUnit
+    {
+        var imported = Guarded(() => SpectrumImport.ToGrid<TUnit>(table, column, reference.Options with { NeededNm = _lightNm }));
+        if (imported is not null)
+            warnings.AddRange(imported.Warnings.Except(warnings, StringComparer.Ordinal).ToList());
+        return imported?.Spectrum;
+    }
+
+    private T? Guarded<T>(Func<T> read)
+        where T : class
+    {
+        try
+        {
+            return read();
+        }
+        catch (InputException exception)
+        {
+            faults.AddAll(exception);
+            return null;
+        }
+    }
+}
