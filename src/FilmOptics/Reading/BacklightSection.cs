@@ -14,13 +14,14 @@ internal static class BacklightSection
         var incidence = Incidence(section, loader);
         double? fluxW = section.OptionalNumber("radiant_flux_w", NumberRule.AboveZero);
         section.Close();
-        return photons is null || incidence is null ? null : new(photons, incidence, fluxW);
+        // Where there is light stays known without the incidence; a fault keeps the rest from use.
+        return photons is null ? null : new(photons, incidence ?? FilmOptics.Incidence.Lambertian, fluxW);
     }
 
     private static Spectrum<PhotonPerNm>? Photons(Section section, SpectrumLoader loader)
     {
         // The shape may stand in backlight itself or under spectrum, where --set finds both forms at one key.
-        bool isShapeHere = section.Has("peak_nm") | section.Has("fwhm_nm") | section.Has("shift_nm");
+        bool isShapeHere = section.Has("peak_nm") | section.Has("fwhm_nm");
         var value = section.Find("spectrum");
         if (isShapeHere && value is not null)
         {

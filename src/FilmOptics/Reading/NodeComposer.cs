@@ -116,6 +116,7 @@ internal sealed class NodeComposer
     private MappingNode Mapping(MappingStart start, int depth)
     {
         var entries = new List<MappingEntry>();
+        var lines = new Dictionary<string, int>(StringComparer.Ordinal);
         while (_parser.MoveNext() && _parser.Current is not MappingEnd)
         {
             var keyPlace = PlaceAt(_parser.Current!.Start);
@@ -123,8 +124,8 @@ internal sealed class NodeComposer
                 throw new UnreadableException(keyPlace, "A list or mapping cannot be a key; a name is due.");
             _parser.MoveNext();
             var value = Value(depth + 1);
-            if (entries.Find(entry => entry.Key.Text == key.Text) is { } first)
-                _faults.Add(key.Place, $"The key {Shown.Quoted(key.Text)} stands twice; it stands in line {first.Key.Place.Line} already.");
+            if (!lines.TryAdd(key.Text, key.Place.Line))
+                _faults.Add(key.Place, $"The key {Shown.Quoted(key.Text)} stands twice; it stands in line {lines[key.Text]} already.");
             else
                 entries.Add(new(key, value));
         }

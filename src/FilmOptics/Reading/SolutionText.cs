@@ -25,6 +25,7 @@ internal sealed class SolutionText(string text, string path, FaultList faults)
         faults.ThrowIfAny();
         RequireSame(expected);
         var tree = Tree(_text);
+        RequireIsOf(solved, tree);
         var changes = new List<(TextSpan, string)>();
         changes.AddRange(Loadings(tree, solved));
         changes.AddRange(FileNames(tree, newPath));
@@ -44,6 +45,16 @@ internal sealed class SolutionText(string text, string path, FaultList faults)
     {
         if (FlowText.Of(Tree(_text), isJson: true) != FlowText.Of(expected, isJson: true))
             throw new InputException(new InputFault(path, null, null, "The overrides cannot be written into a file of this layout; write them in by hand and leave --set out."));
+    }
+
+    private void RequireIsOf(Film solved, MappingNode root)
+    {
+        static string? Name(Node node, string key) => ((node as MappingNode)?.Find(key)?.Value as ScalarNode)?.Text;
+        var written = Items(root.Find("layers")?.Value).Select(layer =>
+            (Name(layer, "name"), string.Join('\n', Items((layer as MappingNode)?.Find("dots")?.Value).Select(dots => Name(dots, "lot")))));
+        var given = solved.Layers.Select(layer => ((string?)layer.Name, string.Join('\n', layer.Dots.Select(dots => dots.Lot.Name))));
+        if (!written.SequenceEqual(given))
+            throw new InputException(new InputFault(path, null, null, "The layers and dots of this text are not those of the solved film."));
     }
 
     private static IEnumerable<(TextSpan Span, string Value)> Loadings(MappingNode root, Film solved)
@@ -80,11 +91,11 @@ internal sealed class SolutionText(string text, string path, FaultList faults)
     private List<(TextSpan Span, string Value)> FileNames(MappingNode root, string newPath)
     {
         string oldFolder = Path.GetDirectoryName(Path.GetFullPath(path))!, newFolder = Path.GetDirectoryName(Path.GetFullPath(newPath))!;
+        if (oldFolder == newFolder)
+            return [];
         var reader = new FilmReader(Path.GetDirectoryName(path) ?? "", faults);
         reader.Read(root, "");
         faults.ThrowIfAny();
-        if (oldFolder == newFolder)
-            return [];
         return [.. from name in reader.FileNames
                    where !Path.IsPathRooted(name.Text)
                    let moved = Path.GetRelativePath(newFolder, Path.Combine(oldFolder, name.Text)).Replace('\\', '/')

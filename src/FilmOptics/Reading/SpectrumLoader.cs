@@ -76,6 +76,7 @@ internal sealed class SpectrumLoader(string folder, FaultList faults, List<strin
             return null;
         if (table.FirstColumn != "angle_deg" || !Has(table, column))
             return Refused<AngleTable>(reference, table, $"angle_deg, {column}");
+        int faultsBefore = faults.Count;
         var angles = table.WavelengthsNm;
         var values = table.Values(column);
         for (int i = 0; i < angles.Length; i++)
@@ -88,7 +89,7 @@ internal sealed class SpectrumLoader(string folder, FaultList faults, List<strin
 
         if (angles.Length < 2)
             faults.Add(new InputFault(table.Name, table.LineOf(0), null, "There is one angle; two or more are needed."));
-        return faults.Any ? null : new(angles, values, table.Name);
+        return faults.Count > faultsBefore ? null : new(angles, values, table.Name);
     }
 
     /// <summary>The three filters of a panel; null with a fault.</summary>

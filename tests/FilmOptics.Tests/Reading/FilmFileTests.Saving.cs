@@ -91,6 +91,15 @@ public sealed class FilmFileSavingTests : IDisposable
         Assert.Contains("write them in by hand", fault.Message, StringComparison.Ordinal);
     }
 
+    [Fact]
+    public void WithLoadings_TextOfAnotherFilm_IsRefused()
+    {
+        var film = _folder.Load(FilmFolder.Whole).Film;
+        string other = FilmFolder.With("- name: barrier", "- name: base");
+        var fault = Assert.Single(Assert.Throws<InputException>(() => FilmFile.WithLoadings(other, _folder.FilmPath, [], film, _folder.FilmPath)).Faults);
+        Assert.Contains("not those of the solved film", fault.Message, StringComparison.Ordinal);
+    }
+
     [Theory]
     [InlineData("a:\n- x: 1 # c\n  y:\n- z: [1]\n", "a[0].y=5", "a:\n- x: 1 # c\n  y: 5\n- z: [1]\n")]
     [InlineData("a:\n- x: 1 # c\n- z: [1]\n", "a[0].y.w=5", "a:\n- x: 1 # c\n  y: {w: 5}\n- z: [1]\n")]
