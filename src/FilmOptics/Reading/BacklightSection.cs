@@ -1,4 +1,3 @@
-using System.Globalization;
 using Colorimetry;
 
 namespace FilmOptics.Reading;
@@ -55,8 +54,9 @@ internal static class BacklightSection
         double reachNm = fwhmNm / 2 * Math.Sqrt(Math.Log2(1 / TailShare));
         if (atNm - reachNm < WavelengthGrid.FirstNm || atNm + reachNm > WavelengthGrid.LastNm)
         {
-            section.Fault("fwhm_nm", string.Create(CultureInfo.InvariantCulture,
-                $"The line at {Shown.Number(atNm)} nm, {Shown.Number(fwhmNm)} nm wide, is over 0.1 % of its peak from {Shown.Number(atNm - reachNm)} to {Shown.Number(atNm + reachNm)} nm; {WavelengthGrid.FirstNm} to {WavelengthGrid.LastNm} nm is allowed."));
+            section.Fault("fwhm_nm",
+                $"The line at {Shown.Number(atNm)} nm, {Shown.Number(fwhmNm)} nm wide, is over 0.1 % of its peak from "
+                + $"{Shown.Number(atNm - reachNm)} to {Shown.Number(atNm + reachNm)} nm; {WavelengthGrid.FirstNm} to {WavelengthGrid.LastNm} nm is allowed.");
             return null;
         }
 

@@ -44,7 +44,9 @@ internal static class CavitySection
             {
                 if (byAngle.Values[i] + absorptance.Peak <= 1 + rounding)
                     continue;
-                section.Fault(key, $"Above, reflectance {Shown.Number(byAngle.Values[i])} at {Shown.Number(byAngle.AnglesDeg[i])} degrees and absorptance {Shown.Number(absorptance.Peak)} sum to over 1; at most 1 is allowed.");
+                section.Fault(key,
+                    $"Above, reflectance {Shown.Number(byAngle.Values[i])} at {Shown.Number(byAngle.AnglesDeg[i])} degrees "
+                    + $"and absorptance {Shown.Number(absorptance.Peak)} sum to over 1; at most 1 is allowed.");
                 return;
             }
 
@@ -65,6 +67,7 @@ internal static class CavitySection
         string range = first == last
             ? string.Create(CultureInfo.InvariantCulture, $"{WavelengthGrid.NmAt(first)} nm")
             : string.Create(CultureInfo.InvariantCulture, $"{WavelengthGrid.NmAt(first)} nm (and up to {WavelengthGrid.NmAt(last)} nm)");
-        section.Fault(key, $"Above, reflectance {Shown.Number(above.Samples[first])} and absorptance {Shown.Number(absorptance.Samples[first])} sum to over 1 at {range}; at most 1 is allowed.");
+        section.Fault(key,
+            $"Above, reflectance {Shown.Number(above.Samples[first])} and absorptance {Shown.Number(absorptance.Samples[first])} sum to over 1 at {range}; at most 1 is allowed.");
     }
 }

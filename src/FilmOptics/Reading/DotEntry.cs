@@ -53,11 +53,18 @@ internal sealed record DotEntry(DotLot Lot, double? LoadingMgPerMl, double? WtPe
             entry.Lot, entry.WtPercent is { } percent ? percent * 10 * layerDensityGPerMl : entry.LoadingMgPerMl ?? double.NaN))];
     }
 
-    private static bool HaveDensities(IReadOnlyList<DotEntry> entries, double? hostDensityGPerMl)
+    /// <summary>The keys of the densities that are not given.</summary>
+    public static List<string> MissingDensities(IEnumerable<DotLot> lots, double? hostDensityGPerMl)
     {
-        var missing = entries.Where(entry => entry.Lot.DensityGPerMl is null).Select(entry => $"lots[{entry.Lot.Name}].density_g_per_ml").ToList();
+        var missing = lots.Where(lot => lot.DensityGPerMl is null).Select(lot => $"lots[{lot.Name}].density_g_per_ml").ToList();
         if (hostDensityGPerMl is null)
             missing.Insert(0, "host.density_g_per_ml");
+        return missing;
+    }
+
+    private static bool HaveDensities(IReadOnlyList<DotEntry> entries, double? hostDensityGPerMl)
+    {
+        var missing = MissingDensities(entries.Select(entry => entry.Lot), hostDensityGPerMl);
         if (missing.Count == 0)
             return true;
         var byWeight = entries.First(entry => entry.WtPercent is not null).Section;

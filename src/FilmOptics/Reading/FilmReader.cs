@@ -109,7 +109,11 @@ internal sealed class FilmReader
             lots.Add(lot);
             _parts.Add(lot);
             if (used.Contains(lot.Name) && lot is { FilmYieldFactor: 1, FilmExtinctionFactor: 1, FilmEmissionShiftNm: 0 })
-                _warnings.Add($"Lot '{lot.Name}' is not calibrated: film_yield_factor, film_extinction_factor and film_emission_shift_nm are at their defaults, so the film is taken to act like the dilute sample.");
+            {
+                _warnings.Add(
+                    $"Lot '{lot.Name}' is not calibrated: film_yield_factor, film_extinction_factor and film_emission_shift_nm are at their defaults, "
+                    + "so the film is taken to act like the dilute sample.");
+            }
         }
 
         return lots;

@@ -24,7 +24,8 @@ internal static class FlowText
     }
 
     private static bool IsSafe(string text) =>
-        (char.IsLetterOrDigit(text[0]) || text[0] is '.' or '/') && text[^1] != ' ' && text.All(c => char.IsLetterOrDigit(c) || c is ' ' or '_' or '.' or '-' or '/' or '(' or ')' or '°' or '+');
+        (char.IsLetterOrDigit(text[0]) || text[0] is '.' or '/') && text[^1] != ' '
+        && text.All(c => char.IsLetterOrDigit(c) || c is ' ' or '_' or '.' or '-' or '/' or '(' or ')' or '°' or '+');
 
     private static class JsonText
     {

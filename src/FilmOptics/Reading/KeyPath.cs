@@ -43,7 +43,8 @@ internal static class KeyPath
         bool canHold = node is MappingNode || (node is ScalarNode && !Section.TryNumber(node, out _) && above is not null);
         if (!canHold)
         {
-            faults.Add(step.Place, $"{Shown.Quoted(step.Text)} is due in {node.Described} here, which has no keys{(node is ListNode ? "; choose an item by [index] or [name]" : "")}.");
+            string hint = node is ListNode ? "; choose an item by [index] or [name]" : "";
+            faults.Add(step.Place, $"{Shown.Quoted(step.Text)} is due in {node.Described} here, which has no keys{hint}.");
             return null;
         }
 

@@ -43,9 +43,9 @@ internal sealed class LayerSection
             Dots = dots,
             HostDensityGPerMl = _parts.HostDensityGPerMl,
         };
-        if (Loadings.DotVolumeShare(layer) >= 1)
+        if (Loadings.DotVolumeShare(layer) is >= 1 and var share)
         {
-            _section.Fault("dots", $"{_section.PathOf("dots")} fill {Shown.Number(100 * Loadings.DotVolumeShare(layer)!.Value)} % of the layer's volume; below 100 % is allowed.");
+            _section.Fault("dots", $"{_section.PathOf("dots")} fill {Shown.Number(100 * share)} % of the layer's volume; below 100 % is allowed.");
             return null;
         }
 
@@ -67,15 +67,16 @@ internal sealed class LayerSection
         string key = _section.PathOf("coat_weight_g_per_m2");
         if (Loadings.DensityGPerMl(layer) is not { } densityGPerMl)
         {
-            var missing = layer.Dots.Where(dots => dots.Lot.DensityGPerMl is null).Select(dots => $"lots[{dots.Lot.Name}].density_g_per_ml");
-            _section.Fault("coat_weight_g_per_m2", $"{key} needs densities to become a thickness; missing: {string.Join(", ", _parts.HostDensityGPerMl is null ? missing.Prepend("host.density_g_per_ml") : missing)}.");
+            var missing = DotEntry.MissingDensities(layer.Dots.Select(dots => dots.Lot), _parts.HostDensityGPerMl);
+            _section.Fault("coat_weight_g_per_m2", $"{key} needs densities to become a thickness; missing: {string.Join(", ", missing)}.");
             return null;
         }
 
         double thicknessUm = coatWeightGPerM2 / densityGPerMl;
         if (NumberRule.ThicknessUm.Allows(thicknessUm) || double.IsNaN(thicknessUm))
             return layer with { ThicknessMm = thicknessUm / 1000 };
-        _section.Fault("coat_weight_g_per_m2", $"{key} is {Shown.Number(coatWeightGPerM2)}, which is {Shown.Number(thicknessUm)} µm; allowed is {NumberRule.ThicknessUm.Words}.");
+        _section.Fault("coat_weight_g_per_m2",
+            $"{key} is {Shown.Number(coatWeightGPerM2)}, which is {Shown.Number(thicknessUm)} µm; allowed is {NumberRule.ThicknessUm.Words}.");
         return null;
     }
 

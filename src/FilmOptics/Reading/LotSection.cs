@@ -23,7 +23,8 @@ internal sealed class LotSection
         if (_yieldShare * _yieldFactor > 1 + 1e-12)
         {
             section.Fault("film_yield_factor",
-                $"{section.Path}: quantum_yield {Shown.Number(_yieldShare)} times film_yield_factor {Shown.Number(_yieldFactor)} is {Shown.Number(_yieldShare * _yieldFactor)}; at most 1 is allowed.");
+                $"{section.Path}: quantum_yield {Shown.Number(_yieldShare)} times film_yield_factor {Shown.Number(_yieldFactor)} "
+                + $"is {Shown.Number(_yieldShare * _yieldFactor)}; at most 1 is allowed.");
         }
 
         _densityGPerMl = section.OptionalNumber("density_g_per_ml", NumberRule.DensityGPerMl);
@@ -31,7 +32,11 @@ internal sealed class LotSection
         _leadShare = section.OptionalNumber("lead_mass_fraction", NumberRule.Share);
         double heavyShare = (_cadmiumShare ?? 0) + (_leadShare ?? 0);
         if (heavyShare > 1)
-            section.Fault("lead_mass_fraction", $"{section.Path}: cadmium_mass_fraction and lead_mass_fraction sum to {Shown.Number(heavyShare)}; at most 1 is allowed.");
+        {
+            section.Fault("lead_mass_fraction",
+                $"{section.Path}: cadmium_mass_fraction and lead_mass_fraction sum to {Shown.Number(heavyShare)}; at most 1 is allowed.");
+        }
+
         _pricePerG = section.OptionalNumber("price_per_g", NumberRule.AtLeastZero);
         _stockWtPercent = section.OptionalNumber("stock_wt_percent", NumberRule.StockWtPercent);
         Emission = section.Required("emission") is { } emission

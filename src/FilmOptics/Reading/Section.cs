@@ -6,6 +6,8 @@ namespace FilmOptics.Reading;
 /// <remarks>After a fault a number is NaN and anything else null; reading goes on, and the faults keep the result from use.</remarks>
 internal sealed class Section(MappingNode node, string path, FaultList faults)
 {
+    private const NumberStyles NumberForm = NumberStyles.AllowLeadingSign | NumberStyles.AllowDecimalPoint | NumberStyles.AllowExponent;
+
     private readonly List<string> _known = [];
 
     public Place Place => node.Place;
@@ -17,9 +19,6 @@ internal sealed class Section(MappingNode node, string path, FaultList faults)
 
     /// <summary>A key of this section in full.</summary>
     public string PathOf(string key) => Path.Length == 0 ? key : $"{Path}.{key}";
-
-    /// <summary>Keys that may stand here though this reader does not ask for them.</summary>
-    public void Knows(params ReadOnlySpan<string> keys) => _known.AddRange(keys);
 
     public bool Has(string key) => Find(key) is not null;
 
@@ -66,8 +65,8 @@ internal sealed class Section(MappingNode node, string path, FaultList faults)
     public static bool TryNumber(Node node, out double number)
     {
         number = double.NaN;
-        return node is ScalarNode { IsPlain: true, Text: ['0' or '1' or '2' or '3' or '4' or '5' or '6' or '7' or '8' or '9' or '+' or '-' or '.', ..] text }
-            && double.TryParse(text, NumberStyles.AllowLeadingSign | NumberStyles.AllowDecimalPoint | NumberStyles.AllowExponent, CultureInfo.InvariantCulture, out number)
+        return node is ScalarNode { IsPlain: true, Text: [(>= '0' and <= '9') or '+' or '-' or '.', ..] text }
+            && double.TryParse(text, NumberForm, CultureInfo.InvariantCulture, out number)
             && double.IsFinite(number);
     }
 

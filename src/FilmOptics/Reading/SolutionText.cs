@@ -44,7 +44,10 @@ internal sealed class SolutionText(string text, string path, FaultList faults)
     private void RequireSame(MappingNode expected)
     {
         if (FlowText.Of(Tree(_text), isJson: true) != FlowText.Of(expected, isJson: true))
-            throw new InputException(new InputFault(path, null, null, "The overrides cannot be written into a file of this layout; write them in by hand and leave --set out."));
+        {
+            throw new InputException(new InputFault(
+                path, null, null, "The overrides cannot be written into a file of this layout; write them in by hand and leave --set out."));
+        }
     }
 
     private void RequireIsOf(Film solved, MappingNode root)

@@ -8,6 +8,8 @@ internal sealed class SpectrumLoader(string folder, FaultList faults, List<strin
     // Where light is below this share of its peak, nothing has to be known about what it meets.
     private const double LightShare = 1e-3;
 
+    private const string Cie1931 = "CIE 1931 2°", Cie1964 = "CIE 1964 10°";
+
     private readonly Dictionary<string, SpectrumTable?> _tables = [];
     private (double FromNm, double ToNm)? _lightNm;
 
@@ -35,7 +37,8 @@ internal sealed class SpectrumLoader(string folder, FaultList faults, List<strin
             : Import<PhotonPerNm>(reference, table, column);
         if (photons is null || photons.Integral > 0)
             return photons?.NormalisedToUnitSum();
-        faults.Add(reference.File.Place, $"{key}: {Shown.Quoted(reference.File.Text)} does not integrate: it is 0 at every wavelength; a light is above 0 somewhere.");
+        faults.Add(reference.File.Place,
+            $"{key}: {Shown.Quoted(reference.File.Text)} does not integrate: it is 0 at every wavelength; a light is above 0 somewhere.");
         return null;
     }
 
@@ -77,18 +80,15 @@ internal sealed class SpectrumLoader(string folder, FaultList faults, List<strin
         if (table.FirstColumn != "angle_deg" || !Has(table, column))
             return Refused<AngleTable>(reference, table, $"angle_deg, {column}");
         int faultsBefore = faults.Count;
-        var angles = table.WavelengthsNm;
+        var rule = column == "reflectance" ? NumberRule.Share : NumberRule.AtLeastZero;
+        var angles = table.AnglesDeg;
         var values = table.Values(column);
         for (int i = 0; i < angles.Length; i++)
         {
-            if (angles[i] is < 0 or > 90)
-                faults.Add(new InputFault(table.Name, table.LineOf(i), null, $"The angle is {Shown.Number(angles[i])}; 0 to 90 degrees is allowed."));
-            if (values[i] < 0 || (column == "reflectance" && values[i] > 1))
-                faults.Add(new InputFault(table.Name, table.LineOf(i), null, $"{column} is {Shown.Number(values[i])} at {Shown.Number(angles[i])} degrees; {(column == "reflectance" ? "0 to 1" : "at least 0")} is allowed."));
+            if (!rule.Allows(values[i]))
+                faults.Add(table.FaultAt(i, column, $"{column} is {Shown.Number(values[i])} at {Shown.Number(angles[i])} degrees; {rule.Words} is allowed."));
         }
 
-        if (angles.Length < 2)
-            faults.Add(new InputFault(table.Name, table.LineOf(0), null, "There is one angle; two or more are needed."));
         return faults.Count > faultsBefore ? null : new(angles, values, table.Name);
     }
 
@@ -112,16 +112,16 @@ internal sealed class SpectrumLoader(string folder, FaultList faults, List<strin
     /// <summary>An observer by name or from a file; null with a fault.</summary>
     public StandardObserver? Observer(Node value, string key)
     {
-        var known = new[] { StandardObserver.Cie1931, StandardObserver.Cie1964 };
-        if (value is ScalarNode { IsNull: false } name)
+        switch (value)
         {
-            if (Array.Find(known, observer => observer.Name == name.Text) is { } standard)
-                return standard;
-            if (!name.Text.Contains('.', StringComparison.Ordinal))
-            {
-                faults.Add(value.Place, $"{key} is {name.Described}; allowed is {string.Join(", ", known.Select(observer => observer.Name))} or a CSV file (nearest: {Shown.Nearest(name.Text, known.Select(observer => observer.Name))}).");
+            case ScalarNode { Text: Cie1931 }:
+                return StandardObserver.Cie1931;
+            case ScalarNode { Text: Cie1964 }:
+                return StandardObserver.Cie1964;
+            case ScalarNode { IsNull: false } name when !name.Text.Contains('.', StringComparison.Ordinal):
+                string nearest = Shown.Nearest(name.Text, [Cie1931, Cie1964])!;
+                faults.Add(value.Place, $"{key} is {name.Described}; allowed is {Cie1931}, {Cie1964} or a CSV file (nearest: {nearest}).");
                 return null;
-            }
         }
 
         if (FileOnly(value, key, SpectrumKind.Observer) is not { } reference || Table(reference) is not { } table)
@@ -191,7 +191,8 @@ internal sealed class SpectrumLoader(string folder, FaultList faults, List<strin
     private T? Refused<T>(SpectrumReference reference, SpectrumTable table, string due)
         where T : class
     {
-        faults.Add(reference.File.Place, $"{reference.Key}: {Shown.Quoted(reference.File.Text)} has the columns {table.FirstColumn}, {string.Join(", ", table.Columns)}; due is {due}.");
+        string columns = string.Join(", ", table.Columns.Prepend(table.FirstColumn));
+        faults.Add(reference.File.Place, $"{reference.Key}: {Shown.Quoted(reference.File.Text)} has the columns {columns}; due is {due}.");
         return null;
     }
 

@@ -17,7 +17,12 @@ internal static class TargetSection
         var place = at switch { "film" => TargetPlace.Film, "panel" => TargetPlace.Panel, _ => hasPanel ? TargetPlace.Panel : TargetPlace.Film };
         var view = section.Word("view", "hemisphere", "normal") == "normal" ? TargetView.Normal : TargetView.Hemisphere;
         if (view == TargetView.Normal && incidence == IncidenceKind.Normal)
-            section.Fault("view", $"{section.PathOf("view")} is normal with backlight.incidence normal: a beam along the normal has no radiance; give hemisphere, or another incidence.");
+        {
+            section.Fault("view",
+                $"{section.PathOf("view")} is normal with backlight.incidence normal: a beam along the normal has no radiance; "
+                + "give hemisphere, or another incidence.");
+        }
+
         var white = section.Required("white_xy") is { } value ? White(section, value) : null;
         double toleranceXy = section.Number("tolerance_xy", NumberRule.AboveZero, DefaultToleranceXy);
         var free = Free(section, parts);
@@ -60,7 +65,11 @@ internal static class TargetSection
         }
 
         if (items.Count != 2)
-            section.Fault("free", $"{section.PathOf("free")} names {items.Count} lot{(items.Count == 1 ? "" : "s")}; two are due, to meet the two coordinates of white.");
+        {
+            string lots = items.Count == 1 ? "1 lot" : $"{items.Count} lots";
+            section.Fault("free", $"{section.PathOf("free")} names {lots}; two are due, to meet the two coordinates of white.");
+        }
+
         return free;
     }
 
@@ -75,7 +84,11 @@ internal static class TargetSection
         double max = entry.Number("max_mg_per_ml", NumberRule.AboveZero, DefaultMaxMgPerMl);
         entry.Close();
         if (min >= max)
-            entry.Fault(entry.Has("min_mg_per_ml") ? "min_mg_per_ml" : "max_mg_per_ml", $"{path} has min_mg_per_ml {Shown.Number(min)} and max_mg_per_ml {Shown.Number(max)}; the minimum has to be below.");
+        {
+            entry.Fault(entry.Has("min_mg_per_ml") ? "min_mg_per_ml" : "max_mg_per_ml",
+                $"{path} has min_mg_per_ml {Shown.Number(min)} and max_mg_per_ml {Shown.Number(max)}; the minimum has to be below.");
+        }
+
         return name is not null && IsUsed(name, entry.Find("lot")!, entry.PathOf("lot"), section, parts) ? new(name, min, max) : null;
     }
 
