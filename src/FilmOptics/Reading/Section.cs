@@ -84,11 +84,18 @@ internal sealed class Section(MappingNode node, string path, FaultList faults)
 
     public string? OptionalText(string key) => Find(key) is { } value ? TextOf(value, PathOf(key)) : null;
 
-    /// <summary>Text that is not empty, or null with a fault.</summary>
+    /// <summary>One line of text that is not empty, or null with a fault.</summary>
     public string? TextOf(Node value, string fullKey)
     {
         if (value is ScalarNode { IsNull: false } scalar && !string.IsNullOrWhiteSpace(scalar.Text))
-            return scalar.Text;
+        {
+            // Reports and charts are made of it.
+            if (Shown.IsOneLine(scalar.Text))
+                return scalar.Text;
+            faults.Add(value.Place, $"{fullKey} is {scalar.Described}, which holds a line end or another character that is no text; one line of text is due.");
+            return null;
+        }
+
         faults.Add(value.Place, $"{fullKey} is {(value is ScalarNode { IsNull: false } ? "empty" : value.Described)}; text is due.");
         return null;
     }

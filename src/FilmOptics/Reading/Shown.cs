@@ -17,6 +17,20 @@ internal static class Shown
         return shown.Append(text.Length > Longest ? "…'" : "'").ToString();
     }
 
+    /// <summary>Whether the text has no control character and no half of a surrogate pair.</summary>
+    public static bool IsOneLine(string text)
+    {
+        for (int i = 0; i < text.Length; i++)
+        {
+            bool isPair = i + 1 < text.Length && char.IsSurrogatePair(text[i], text[i + 1]);
+            if (char.IsControl(text[i]) || (char.IsSurrogate(text[i]) && !isPair))
+                return false;
+            i += isPair ? 1 : 0;
+        }
+
+        return true;
+    }
+
     /// <summary>A number with up to six digits.</summary>
     public static string Number(double value) => value.ToString("G6", CultureInfo.InvariantCulture);
 

@@ -43,6 +43,8 @@ public sealed class FilmFileFaultTests : IDisposable
     [InlineData("thickness_um: 100", "thickness_um: 0x64", "0x64", "a number is due")]
     [InlineData("below_reflectance: 0.95", "below_reflectance: high", "high", "'high'", "a number is due", "or a spectrum file")]
     [InlineData("title: Two lots, one layer", "title: [a, b]", "[a", "text is due")]
+    [InlineData("title: Two lots, one layer", "title: \"a\\u0007b\"", "\"a", "'a?b'", "one line of text")]
+    [InlineData("title: Two lots, one layer", "title: \"\"", "\"\"", "title is empty")]
     [InlineData("sheet: {width_mm: 600, height_mm: 340}", "sheet: 600", "600", "sheet is '600'", "a mapping is due")]
     [InlineData("white_xy: [0.3127, 0.3290]", "white_xy: [0.3127]", "[0.3127]", "a list of 1", "a list of two")]
     [InlineData("area_shares: [0.3, 0.3, 0.3]", "area_shares: 0.3", "0.3\n\ntarget", "list of three")]

@@ -53,7 +53,7 @@ public sealed class FilmFileRandomTests : IDisposable
             Assert.Equal(film.Layers, read.Layers.Select(layer => new RandomLayer(
                 layer.ThicknessMm * 1000, layer.RefractiveIndex, layer.Scattering[600], layer.Anisotropy[600], layer.Dots[0].LoadingMgPerMl, layer.Dots[1].LoadingMgPerMl)),
                 (one, other) => Math.Abs(one.ThicknessUm - other.ThicknessUm) < 1e-9 && one with { ThicknessUm = 0 } == other with { ThicknessUm = 0 });
-        }, iter: 100);
+        }, iter: 60);
 
     [Fact]
     public void RandomFilm_SavedWithRandomLoadings_ReadsBackEqual() =>
@@ -64,7 +64,7 @@ public sealed class FilmFileRandomTests : IDisposable
             var back = _folder.Load(FilmFile.WithLoadings(yaml, _folder.FilmPath, [], solved, _folder.FilmPath)).Film;
             foreach (var (one, other) in solved.Layers.SelectMany(layer => layer.Dots).Zip(back.Layers.SelectMany(layer => layer.Dots)))
                 Assert.Equal(one.LoadingMgPerMl, other.LoadingMgPerMl, one.LoadingMgPerMl * 1e-7);
-        }, iter: 50);
+        }, iter: 30);
 
     // Values that no key of the film file takes, and keys that it does not have.
     [Fact]
@@ -80,7 +80,7 @@ public sealed class FilmFileRandomTests : IDisposable
             string[] changed = [.. lines];
             changed[keyLines[at]] = line[..(colon + 2)] + wrong[which];
             Assert.All(_folder.Faults(string.Join('\n', changed)), fault => Assert.True(fault.Line > 0, fault.ToString()));
-        }, iter: 400);
+        }, iter: 200);
     }
 
     [Fact]
@@ -91,7 +91,7 @@ public sealed class FilmFileRandomTests : IDisposable
         {
             string yaml = FilmFolder.Whole.Remove(at, Math.Min(removed, FilmFolder.Whole.Length - at)).Insert(at, odd[which].ToString());
             ReadsOrIsRefused(yaml);
-        }, iter: 1500);
+        }, iter: 400);
     }
 
     [Fact]
@@ -100,7 +100,7 @@ public sealed class FilmFileRandomTests : IDisposable
         string[] keys = ["title", "backlight", "spectrum", "layers", "[0]", "[dot layer]", "[9]", "dots", "[green one]", "lots", ".", "[", "]", "=", "cavity", "target", "free", "", "x"];
         string[] values = ["1", "-1", "a.csv", "[1, 2]", "{a: 1}", "", "[", "{file: led.csv}", "~", "green one", "\n", "- a"];
         Gen.Select(Gen.Int[0, keys.Length - 1].Array[1, 5], Gen.Bool, Gen.Int[0, values.Length - 1]).Sample((steps, dotted, value) =>
-            ReadsOrIsRefused(FilmFolder.Whole, $"{string.Join(dotted ? "." : "", steps.Select(step => keys[step]))}={values[value]}"), iter: 1500);
+            ReadsOrIsRefused(FilmFolder.Whole, $"{string.Join(dotted ? "." : "", steps.Select(step => keys[step]))}={values[value]}"), iter: 400);
     }
 
     private void ReadsOrIsRefused(string yaml, params string[] overrides)
