@@ -15,16 +15,13 @@ internal static class CavitySection
         }
 
         var below = loader.NumberOrSpectrum<Fraction>(section, "below_reflectance", NumberRule.Share, SpectrumKind.Reflectance);
-        AngleTable? byAngle = null;
-        var above = loader.IsByAngle(section.Find("above_reflectance"))
-            ? null
+        var value = section.Find("above_reflectance");
+        string key = section.PathOf("above_reflectance");
+        bool isByAngle = loader.IsByAngle(value, key);
+        var byAngle = isByAngle ? loader.ByAngle(value!, key, SpectrumKind.Reflectance, "reflectance") : null;
+        var above = isByAngle
+            ? Spectrum.Flat<Fraction>(0, "by angle")
             : loader.NumberOrSpectrum<Fraction>(section, "above_reflectance", NumberRule.Share, SpectrumKind.Reflectance);
-        if (above is null && section.Find("above_reflectance") is { } value && loader.IsByAngle(value))
-        {
-            byAngle = loader.ByAngle(value, section.PathOf("above_reflectance"), SpectrumKind.Reflectance, "reflectance");
-            above = Spectrum.Flat<Fraction>(0, "by angle");
-        }
-
         var absorptance = loader.NumberOrSpectrum<Fraction>(section, "above_absorptance", NumberRule.Share, SpectrumKind.Absorptance);
         double bypassShare = section.Number("bypass_share", NumberRule.Share, 0);
         section.Close();

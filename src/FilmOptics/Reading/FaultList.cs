@@ -23,12 +23,6 @@ internal sealed class FaultList(string file)
             _faults.Add(fault);
     }
 
-    public void AddAll(InputException exception)
-    {
-        foreach (var fault in exception.Faults)
-            Add(fault);
-    }
-
     /// <summary>Throws when there is a fault: those of the film file first, each file's by line.</summary>
     public void ThrowIfAny()
     {

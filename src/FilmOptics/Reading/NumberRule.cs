@@ -20,7 +20,7 @@ internal sealed record NumberRule(double Low, double High, string Words, bool Is
     public static readonly NumberRule StockWtPercent = new(0, 100, "above 0, to 100 %", IsLowOpen: true);
     public static readonly NumberRule DensityGPerMl = new(0, 25, "above 0, to 25 g/mL", IsLowOpen: true);
     public static readonly NumberRule ShapePeakNm = new(360, 830, "360 to 830 nm");
-    public static readonly NumberRule ShiftNm = new(-500, 500, "-500 to 500 nm");
+    public static readonly NumberRule ShiftNm = new(-200, 200, "-200 to 200 nm");
 
     public bool Allows(double value) =>
         (IsLowOpen ? value > Low : value >= Low) && (IsHighOpen ? value < High : value <= High);

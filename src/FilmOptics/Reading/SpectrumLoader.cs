@@ -11,7 +11,7 @@ internal sealed class SpectrumLoader(string folder, FaultList faults, List<strin
     private const string Cie1931 = "CIE 1931 2°", Cie1964 = "CIE 1964 10°";
 
     private readonly Dictionary<string, SpectrumTable?> _tables = [];
-    private (double FromNm, double ToNm)? _lightNm;
+    private (double FirstNm, double LastNm)? _lightNm;
 
     /// <summary>Every scalar that named a file.</summary>
     public List<ScalarNode> FileNames { get; } = [];
@@ -21,7 +21,7 @@ internal sealed class SpectrumLoader(string folder, FaultList faults, List<strin
     public void SetLight(IEnumerable<Spectrum<PhotonPerNm>?> lights)
     {
         var ranges = lights.OfType<Spectrum<PhotonPerNm>>().Select(RangeNm).ToList();
-        _lightNm = ranges.Count == 0 ? null : (ranges.Min(range => range.FromNm), ranges.Max(range => range.ToNm));
+        _lightNm = ranges.Count == 0 ? null : (ranges.Min(range => range.FirstNm), ranges.Max(range => range.LastNm));
     }
 
     /// <summary>Light or emission, normalised to one photon; null with a fault.</summary>
@@ -66,10 +66,10 @@ internal sealed class SpectrumLoader(string folder, FaultList faults, List<strin
     }
 
     /// <summary>True where a file is named and its first column holds angles.</summary>
-    public bool IsByAngle(Node? value)
+    public bool IsByAngle(Node? value, string key)
     {
         var name = value is MappingNode mapping ? mapping.Find("file")?.Value : value;
-        return name is ScalarNode scalar && IsFileName(scalar) && File.Exists(PathOf(scalar)) && Table(PathOf(scalar))?.FirstColumn == "angle_deg";
+        return name is ScalarNode scalar && IsFileName(scalar) && File.Exists(PathOf(scalar)) && Table(scalar, key)?.FirstColumn == "angle_deg";
     }
 
     /// <summary>A table over the polar angle; null with a fault.</summary>
@@ -128,10 +128,10 @@ internal sealed class SpectrumLoader(string folder, FaultList faults, List<strin
             return null;
         if (table.FirstColumn != "wavelength_nm" || !SpectrumKind.Observer.Columns.All(column => Has(table, column)))
             return Refused<StandardObserver>(reference, table, "wavelength_nm, x_bar, y_bar, z_bar");
-        return Guarded(() => StandardObserver.FromTable(table));
+        return Guarded(reference.File, key, () => StandardObserver.FromTable(table));
     }
 
-    private static (double FromNm, double ToNm) RangeNm(Spectrum<PhotonPerNm> light)
+    private static (double FirstNm, double LastNm) RangeNm(Spectrum<PhotonPerNm> light)
     {
         double least = LightShare * light.Peak;
         int first = 0, last = WavelengthGrid.Count - 1;
@@ -165,16 +165,17 @@ internal sealed class SpectrumLoader(string folder, FaultList faults, List<strin
         FileNames.Add(reference.File);
         string path = PathOf(reference.File);
         if (File.Exists(path))
-            return Table(path);
+            return Table(reference.File, reference.Key);
         string found = Directory.Exists(path) ? "is a folder" : $"is not there (looked for {path})";
         faults.Add(reference.File.Place, $"{reference.Key}: the file {Shown.Quoted(reference.File.Text)} {found}; a spectrum file is due.");
         return null;
     }
 
-    private SpectrumTable? Table(string path)
+    private SpectrumTable? Table(ScalarNode file, string key)
     {
+        string path = PathOf(file);
         if (!_tables.TryGetValue(path, out var table))
-            _tables[path] = table = Guarded(() => SpectrumFile.Read(path));
+            _tables[path] = table = Guarded(file, key, () => SpectrumFile.Read(path));
         return table;
     }
 
@@ -199,13 +200,17 @@ internal sealed class SpectrumLoader(string folder, FaultList faults, List<strin
     private Spectrum<TUnit>? Import<TUnit>(SpectrumReference reference, SpectrumTable table, string column)
         where TUnit : struct, ISpectralUnit
     {
-        var imported = Guarded(() => SpectrumImport.ToGrid<TUnit>(table, column, reference.Options with { NeededNm = _lightNm }));
+        // After a fault in all the lights nothing is known to be needed; the first row always covers itself.
+        double firstNm = table.WavelengthsNm[0] + reference.Options.ShiftNm;
+        var options = reference.Options with { NeededNm = _lightNm ?? (firstNm, firstNm) };
+        var imported = Guarded(reference.File, reference.Key, () => SpectrumImport.ToGrid<TUnit>(table, column, options));
         if (imported is not null)
             warnings.AddRange(imported.Warnings.Except(warnings, StringComparer.Ordinal).ToList());
         return imported?.Spectrum;
     }
 
-    private T? Guarded<T>(Func<T> read)
+    // A fault of a spectrum as a whole is told where the film file names it: its cure is often there.
+    private T? Guarded<T>(ScalarNode file, string key, Func<T> read)
         where T : class
     {
         try
@@ -214,7 +219,14 @@ internal sealed class SpectrumLoader(string folder, FaultList faults, List<strin
         }
         catch (InputException exception)
         {
-            faults.AddAll(exception);
+            foreach (var fault in exception.Faults)
+            {
+                if (fault.Line is null)
+                    faults.Add(file.Place, $"{key}: in {Shown.Quoted(file.Text)}, {fault.Message}");
+                else
+                    faults.Add(fault);
+            }
+
             return null;
         }
     }

@@ -45,8 +45,7 @@ public sealed class FilmFileSpectraTests : IDisposable
     public void Emission_ThatIsZero_DoesNotIntegrate()
     {
         _folder.Curve("red-emission.csv", "wavelength_nm,photons_per_nm", _ => "0");
-        var fault = Assert.Single(_folder.Faults(FilmFolder.Whole));
-        Assert.Contains("0", fault.Message, StringComparison.Ordinal);
+        _folder.Refuses(FilmFolder.Whole, "red-emission.csv", "lots[red one].emission", "no light");
     }
 
     [Theory]
@@ -55,9 +54,7 @@ public sealed class FilmFileSpectraTests : IDisposable
     public void Absorbance_ThatStopsWithinTheLight_NamesTheWavelengths(int fromNm, int toNm, string end)
     {
         _folder.Curve("red-absorbance.csv", "wavelength_nm,absorbance_per_cm", _ => "1", fromNm, toNm);
-        var fault = Assert.Single(_folder.Faults(FilmFolder.Whole));
-        Assert.Equal(_folder.PathOf("red-absorbance.csv"), fault.File);
-        Assert.Contains(end, fault.Message, StringComparison.Ordinal);
+        _folder.Refuses(FilmFolder.Whole, "red-absorbance.csv", "lots[red one].absorbance", $"{end} ", "there is light from 4", "outside: hold");
         Assert.Equal(0, _folder.Load(FilmFolder.With("absorbance: red-absorbance.csv", "absorbance: {file: red-absorbance.csv, outside: zero}")).Film.Lots[1].Absorbance[fromNm == 430 ? 400 : 700]);
         Assert.Equal(1, _folder.Load(FilmFolder.With("absorbance: red-absorbance.csv", "absorbance: {file: red-absorbance.csv, outside: hold}")).Film.Lots[1].Absorbance[fromNm == 430 ? 400 : 700]);
     }
