@@ -1,4 +1,5 @@
 using System.Text;
+using CsCheck;
 
 namespace Colorimetry.Tests.Import;
 
@@ -119,6 +120,41 @@ public sealed class BadSpectrumFileTests
     [InlineData("a\0b.csv")]
     [InlineData(" ")]
     public void Read_OfANameThatIsNone_IsRefused(string path) => Assert.Throws<InputException>(() => SpectrumFile.Read(path));
+
+    // Whatever the bytes are, there is a table or one refusal: no other exception, and nothing but numbers in a table.
+    [Fact]
+    public void Read_OfAGoodFileWithBytesChanged_IsATableOrARefusal()
+    {
+        byte[] good = Encoding.UTF8.GetBytes("# x\nwavelength_nm;red;green\n400;0,5;1\n410;\"2\";3e-1\n\n420;-1;0\n");
+        byte[] likely = [.. ";,\t\"#\r\n .-+eE019xN\u00e9"u8, 0, 0xFF, 0xFE];
+        Gen.Select(Gen.Int[0, good.Length - 1].Array[1, 6], Gen.Int[0, likely.Length - 1].Array[6], Gen.Int[0, 2])
+            .Sample((places, changes, how) =>
+            {
+                List<byte> bytes = [.. good];
+                for (int i = 0; i < places.Length; i++)
+                {
+                    int at = places[i] % bytes.Count;
+                    if (how == 0)
+                        bytes[at] = likely[changes[i]];
+                    else if (how == 1)
+                        bytes.Insert(at, likely[changes[i]]);
+                    else
+                        bytes.RemoveAt(at);
+                }
+
+                try
+                {
+                    SpectrumTable table = Text.Table([.. bytes]);
+                    double[] nm = table.WavelengthsNm.ToArray();
+                    return nm.Length >= 2 && nm.Zip(nm.Skip(1)).All(p => p.First < p.Second)
+                        && table.Columns.All(c => table.Values(c).ToArray().All(double.IsFinite));
+                }
+                catch (InputException e)
+                {
+                    return e.Faults.Count > 0 && e.Faults.All(f => !f.ToString().Contains('\n', StringComparison.Ordinal));
+                }
+            }, iter: 5000);
+    }
 
     private sealed class EndlessStream : Stream
     {

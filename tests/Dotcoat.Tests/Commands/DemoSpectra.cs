@@ -46,7 +46,7 @@ internal static class DemoSpectra
 
     private static (string Name, string Text) Emission(DemoLot lot) => File(
         $"{lot.Stem}-emission.csv", $"photoluminescence of {lot.Title}, dilute, photons", "relative, 1 at the peak", "photons_per_nm",
-        lot.PeakNm - 100, lot.PeakNm + 130, 1, nm => [Line(nm, lot.PeakNm, lot.FwhmNm, redFlank: 1.14, tail: 0.012)]);
+        lot.PeakNm - 100, lot.PeakNm + 170, 1, nm => [Line(nm, lot.PeakNm, lot.FwhmNm, redFlank: 1.14, tail: 0.012)]);
 
     private static (string Name, string Text) Absorbance(DemoLot lot)
     {
