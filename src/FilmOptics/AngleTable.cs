@@ -36,6 +36,18 @@ public sealed class AngleTable
     /// <summary>Values at those angles.</summary>
     public ReadOnlySpan<double> Values => _values;
 
+    /// <summary>Mean of the quantity over Lambertian light in air: ∫ q(θ) sin 2θ dθ over 0 to 90 degrees, exact for the straight pieces.</summary>
+    public double LambertianMean
+    {
+        get
+        {
+            double mean = Piece(0, _anglesDeg[0], _values[0], _values[0]) + Piece(_anglesDeg[^1], 90, _values[^1], _values[^1]);
+            for (int i = 1; i < _anglesDeg.Length; i++)
+                mean += Piece(_anglesDeg[i - 1], _anglesDeg[i], _values[i - 1], _values[i]);
+            return mean;
+        }
+    }
+
     /// <summary>The value at a direction, linear in the angle.</summary>
     /// <param name="airCosine">Cosine of the polar angle in air, 0…1.</param>
     public double At(double airCosine)
@@ -51,5 +63,18 @@ public sealed class AngleTable
             return _values[^1];
         double share = (angleDeg - _anglesDeg[upper - 1]) / (_anglesDeg[upper] - _anglesDeg[upper - 1]);
         return _values[upper - 1] + (share * (_values[upper] - _values[upper - 1]));
+    }
+
+    // ∫ (c + b θ) sin 2θ dθ between two angles.
+    private static double Piece(double fromDeg, double toDeg, double fromValue, double toValue)
+    {
+        if (toDeg <= fromDeg)
+            return 0;
+        double from = fromDeg * Math.PI / 180, to = toDeg * Math.PI / 180;
+        double slope = (toValue - fromValue) / (to - from), offset = fromValue - (slope * from);
+        return Primitive(to) - Primitive(from);
+
+        double Primitive(double angle) =>
+            (-(offset + (slope * angle)) * Math.Cos(2 * angle) / 2) + (slope * Math.Sin(2 * angle) / 4);
     }
 }

@@ -48,5 +48,5 @@ public sealed record DotLot
     public double FilmYieldShare => QuantumYieldShare * FilmYieldFactor;
 
     /// <summary>Decadic absorbance per cm at 1 mg/mL in the film.</summary>
-    public Spectrum<AbsorbancePerCm> FilmAbsorbance => field ??= Absorbance.ScaledBy(FilmExtinctionFactor);
+    public Spectrum<AbsorbancePerCm> FilmAbsorbance => Absorbance.ScaledBy(FilmExtinctionFactor);
 }

@@ -38,5 +38,9 @@ public sealed record DotLoading(DotLot Lot, double LoadingMgPerMl)
     /// <summary>Absorption coefficient of these dots in the film: k = ln 10 · A₁ · factor · c / 10, in 1/mm.</summary>
     /// <param name="wavelengthIndex">Index on <see cref="WavelengthGrid"/>.</param>
     public double AbsorptionPerMm(int wavelengthIndex) =>
-        Lot.FilmAbsorbance.Samples[wavelengthIndex] * LoadingMgPerMl * DotLot.PerMmFromDecadicPerCm;
+        Lot.Absorbance.Samples[wavelengthIndex] * AbsorptionPerMmPerAbsorbance;
+
+    /// <summary>What the dilute absorbance is multiplied with to give 1/mm in this layer.</summary>
+    internal double AbsorptionPerMmPerAbsorbance =>
+        Lot.FilmExtinctionFactor * LoadingMgPerMl * DotLot.PerMmFromDecadicPerCm;
 }
