@@ -45,9 +45,10 @@ public sealed class PhotonTracingModel : IFilmModel
     {
         ArgumentNullException.ThrowIfNull(film);
         var traced = new TracedFilm(film);
+        var lanes = UsesLanes(film) ? new LaneFilm(traced) : null;
         var tally = new BlockRun(_photons, _threads).Run(
             () => new Tally(film.Lots.Count),
-            (block, photons, into) => ScalarTracer.Trace(traced, Xoshiro256.ForBlock(_seed, block), photons, into),
+            (block, photons, into) => TraceBlock(traced, lanes, Xoshiro256.ForBlock(_seed, block), photons, into),
             (sum, more) => sum.Add(more),
             sum => Report(sum),
             cancellationToken);
@@ -60,6 +61,17 @@ public sealed class PhotonTracingModel : IFilmModel
         }
 
         return new TracedOutput(film, tally, _photons, _seed).Build(Name);
+    }
+
+    /// <summary>Whether photons are traced in vector lanes: nearly always.</summary>
+    internal static bool UsesLanes(Film film) => film.Layers.Count <= LaneFilm.MostLayers;
+
+    private static void TraceBlock(TracedFilm film, LaneFilm? lanes, Xoshiro256 random, int photons, Tally into)
+    {
+        if (lanes is null)
+            ScalarTracer.Trace(film, random, photons, into);
+        else
+            LaneTracer.Trace(lanes, random, photons, into);
     }
 
     private void Report(Tally sum) =>
