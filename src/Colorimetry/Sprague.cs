@@ -3,7 +3,8 @@ namespace Colorimetry;
 /// <summary>Sprague's fifth-degree interpolation of evenly spaced values.</summary>
 /// <remarks>
 /// Source: CIE 167:2005, which recommends it for evenly spaced spectral data, with the four values it adds beyond the ends.
-/// It returns the given values at the given points and polynomials up to degree 4 between them.
+/// It returns the given values at the given points, and between them polynomials up to degree 4; in the two intervals at either end,
+/// where the added values count, up to degree 1.
 /// </remarks>
 internal static class Sprague
 {

@@ -53,6 +53,14 @@ public sealed class RefusedImportTests
     }
 
     [Theory]
+    [InlineData(390, 690)]
+    [InlineData(410, 710)]
+    public void ToGrid_OfAFilterThatIsShortAtOneEnd_IsRefused(double firstNm, double lastNm) => Text.AssertRefused(
+        () => SpectrumImport.ToGrid<Fraction>(
+            Text.Table("wavelength_nm,green\n" + Rows(400, 700, 10, _ => 0.5)), "green", new() { NeededNm = (firstNm, lastNm) }),
+        $"but there is light from {firstNm} to {lastNm} nm");
+
+    [Theory]
     [InlineData(1.01, "transmittance is 1.01 at 500 nm; 0 to 1 is allowed.")]
     [InlineData(-0.01, "transmittance is -0.01 at 500 nm, -1 % of the peak")]
     public void ToGrid_OfAShareOutOfRange_NamesItsPlace(double value, string expected) => Text.AssertRefused(

@@ -66,6 +66,21 @@ public sealed class SpectrumImportTests
         Published.AssertWithin(peakNm, centre, fwhmNm < 1 ? 0.5 : 0.01, "centre");
     }
 
+    // The first and last bins are half covered: a filter is known from the half that is, light beyond the file is nothing.
+    [Fact]
+    public void ToGrid_WithFineStepsThatEndWithinABin_KnowsAFilterThereAndHalfOfTheLight()
+    {
+        Spectrum<Fraction> filter = SpectrumImport.ToGrid<Fraction>(
+            Table("transmittance", Range(400, 700, 0.5), _ => 0.25), "transmittance", new() { Outside = OutsideRule.Zero }).Spectrum;
+        Assert.Equal(0.25, filter[400], 12);
+        Assert.Equal(0.25, filter[700], 12);
+        Assert.Equal(0, filter[399]);
+        Spectrum<WattPerNm> light = SpectrumImport.ToGrid<WattPerNm>(
+            Table("power_per_nm", Range(400, 700, 0.5), _ => 0.25), "power_per_nm", new() { Outside = OutsideRule.Zero }).Spectrum;
+        Assert.Equal(0.125, light[400], 12);
+        Assert.Equal(0.25 * 300, light.Integral, 9);
+    }
+
     [Fact]
     public void ToGrid_WithUnevenFineSteps_KeepsTheAreaOfItsRows()
     {
