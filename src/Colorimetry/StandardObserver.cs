@@ -65,13 +65,15 @@ public sealed class StandardObserver
         if (nm[0] > LatestFirstNm || nm[^1] < EarliestLastNm)
         {
             throw new InputException(table.Fault(string.Create(
-                CultureInfo.InvariantCulture, $"the colour-matching functions reach from {nm[0]} to {nm[^1]} nm; at least {LatestFirstNm} to {EarliestLastNm} nm are needed.")));
+                CultureInfo.InvariantCulture, $"the colour-matching functions reach from {nm[0]} to {nm[^1]} nm; at least {LatestFirstNm} to "
+                    + $"{EarliestLastNm} nm are needed.")));
         }
 
         if (EvenSteps.Of(nm) is not { } step || step > CoarsestStepNm)
         {
             throw new InputException(table.Fault(string.Create(
-                CultureInfo.InvariantCulture, $"the steps are uneven or wider than {CoarsestStepNm} nm; colour-matching functions need even steps of at most that.")));
+                CultureInfo.InvariantCulture, $"the steps are uneven or wider than {CoarsestStepNm} nm; colour-matching functions need even steps "
+                    + $"of at most that.")));
         }
 
         return new(name, OnGrid(table, "x_bar", step), OnGrid(table, "y_bar", step), OnGrid(table, "z_bar", step));

@@ -28,7 +28,7 @@ internal sealed class FaultList(string file)
     public InputException ToException()
     {
         if (_count > MostShown)
-            _shown.Add(new(file, null, null, string.Create(CultureInfo.InvariantCulture, $"{_count - MostShown} more faults of this kind follow.")));
+            _shown.Add(new(file, null, null, string.Create(CultureInfo.InvariantCulture, $"{_count - MostShown} more faults follow in this file.")));
         return new(_shown);
     }
 }

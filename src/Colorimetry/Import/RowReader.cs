@@ -32,13 +32,15 @@ internal sealed class RowReader
 
         if (header[0] is not (SpectrumFile.WavelengthColumn or SpectrumFile.AngleColumn))
         {
-            faults.Add(line, TextColumn(reader, 0), $"the first column is {SpectrumFile.Quoted(header[0])}; the first line names the columns, and the first name is "
+            faults.Add(line, TextColumn(reader, 0), $"the first column is {SpectrumFile.Quoted(header[0])}; the first line names the columns, and "
+                + "the first name is "
                 + $"{SpectrumFile.WavelengthColumn} (or {SpectrumFile.AngleColumn} in a table by angle).");
             throw faults.ToException();
         }
 
         if (count < 2)
-            faults.Add(line, null, $"there is one column, {header[0]}; at least one column of values must follow it, separated by comma, semicolon or tab.");
+            faults.Add(line, null, $"there is one column, {header[0]}; at least one column of values must follow it, separated by comma, semicolon "
+                + "or tab.");
         for (int i = 1; i < count; i++)
         {
             if (header[i].Length == 0)
@@ -68,7 +70,8 @@ internal sealed class RowReader
         if (count != _header.Length)
         {
             string hint = count > _header.Length && reader.Separator == ',' ? " (with a decimal comma, separate columns by semicolon or tab)" : "";
-            _faults.Add(line, null, string.Create(CultureInfo.InvariantCulture, $"the row has {count} fields; the header has {_header.Length}{hint}."));
+            _faults.Add(line, null, string.Create(CultureInfo.InvariantCulture, $"fields in the row: {count}; the header has "
+                + $"{_header.Length}{hint}."));
             return;
         }
 
@@ -92,7 +95,7 @@ internal sealed class RowReader
     public SpectrumTable ToTable()
     {
         if (_rows.Count < 2 && !_faults.Any)
-            _faults.Add(null, null, string.Create(CultureInfo.InvariantCulture, $"there are {_rows.Count} rows below the header; at least two are needed."));
+            _faults.Add(null, null, string.Create(CultureInfo.InvariantCulture, $"rows below the header: {_rows.Count}; at least 2 are needed."));
         _rows.Sort((a, b) => a.First != b.First ? a.First.CompareTo(b.First) : a.Line.CompareTo(b.Line));
         for (int i = 1; i < _rows.Count; i++)
         {
@@ -135,7 +138,10 @@ internal sealed class RowReader
                 (_decimalSign, _decimalSignLine) = (sign, line);
             if (sign != _decimalSign || (comma && text.Contains('.', StringComparison.Ordinal)))
             {
-                _faults.Add(line, column, string.Create(CultureInfo.InvariantCulture, $"{_header[field]} is {SpectrumFile.Quoted(text)}, but the decimal sign on line {_decimalSignLine} is '{_decimalSign}'; one decimal sign in a file, and no thousands separators."));
+                _faults.Add(line, column, string.Create(
+                    CultureInfo.InvariantCulture,
+                    $"{_header[field]} is {SpectrumFile.Quoted(text)}, but the decimal sign on line {_decimalSignLine} is '{_decimalSign}'; "
+                    + $"one decimal sign in a file, and no thousands separators."));
                 return double.NaN;
             }
         }

@@ -1,5 +1,3 @@
-using System.Globalization;
-
 namespace Colorimetry;
 
 /// <summary>What a column must satisfy before it is brought to the grid. Each check adds its faults; none changes a value.</summary>
@@ -27,7 +25,7 @@ internal sealed class SpectrumChecks(SpectrumTable table, string column, Spectra
         if (options.Anchor is { } anchor)
         {
             if (options.ScaleFactor != 1)
-                Add($"scale and at_nm with value are both given; one of them sets the scale.");
+                Add("scale and at_nm with value are both given; one of them sets the scale.");
             if (!(anchor.Value > 0) || !double.IsFinite(anchor.Value))
                 Add($"value is {anchor.Value}; a number above 0 is needed.");
             if (!(anchor.AtNm >= nm[0] && anchor.AtNm <= nm[^1]))
@@ -35,7 +33,7 @@ internal sealed class SpectrumChecks(SpectrumTable table, string column, Spectra
         }
 
         if (isLight && options.Outside == OutsideRule.Hold)
-            Add($"outside is hold; light and emission outside a file are zero or nothing at all, so leave it out or say outside: zero.");
+            Add("outside is hold; light and emission outside a file are zero, so leave it out or say outside: zero.");
     }
 
     /// <summary>No value is below the noise.</summary>
@@ -48,7 +46,8 @@ internal sealed class SpectrumChecks(SpectrumTable table, string column, Spectra
             if (values[row] < -SpectralQuantity.NothingShare * Math.Max(peak, 0))
             {
                 AddAt(row, peak > 0
-                    ? (FormattableString)$"{column} is {values[row]} at {nm[row]} nm, {100 * values[row] / peak:0.##} % of the peak; noise down to -0.1 % of the peak is allowed."
+                    ? $"{column} is {values[row]} at {nm[row]} nm, {100 * values[row] / peak:0.##} % of the peak; noise down to -0.1 "
+                        + "% of the peak is allowed."
                     : $"{column} is {values[row]} at {nm[row]} nm; {quantity.AllowedValues}.");
             }
         }
@@ -61,7 +60,8 @@ internal sealed class SpectrumChecks(SpectrumTable table, string column, Spectra
         for (int row = 0; row < values.Length; row++)
         {
             if (!(values[row] >= quantity.LowestValue && values[row] <= quantity.HighestValue))
-                AddAt(row, $"{column} is {values[row]}{(options is { ScaleFactor: 1, Anchor: null } ? "" : " after scaling")} at {nm[row]} nm; {quantity.AllowedValues}.");
+                AddAt(row, $"{column} is {values[row]}{(options is { ScaleFactor: 1, Anchor: null } ? "" : " after scaling")} at "
+                    + $"{nm[row]} nm; {quantity.AllowedValues}.");
         }
     }
 
@@ -75,7 +75,8 @@ internal sealed class SpectrumChecks(SpectrumTable table, string column, Spectra
             bool matters = isLight ? values[row - 1] > nothing || values[row] > nothing : nm[row] > first && nm[row - 1] < last;
             if (matters && nm[row] - nm[row - 1] > quantity.WidestGapNm + EvenSteps.ToleranceNm)
             {
-                AddAt(row, $"no row stands between {nm[row - 1]} and {nm[row]} nm, {nm[row] - nm[row - 1]:0.###} nm apart; {column} is interpolated over at most {quantity.WidestGapNm} nm.");
+                AddAt(row, $"no row stands between {nm[row - 1]} and {nm[row]} nm, {nm[row] - nm[row - 1]:0.###} nm apart; {column} "
+                    + $"is interpolated over at most {quantity.WidestGapNm} nm.");
             }
         }
     }
@@ -100,7 +101,8 @@ internal sealed class SpectrumChecks(SpectrumTable table, string column, Spectra
             double step = Math.Max(nm[row] - nm[row - 1], nm[row + 1] - nm[row]);
             if (step > 1 + EvenSteps.ToleranceNm && last - first + 1 < FewestSamplesOfALine)
             {
-                AddAt(row, $"the line at {nm[row]} nm has {last - first + 1} rows at or above half of its height, {step:0.###} nm apart; at least {FewestSamplesOfALine} are needed for its shape, so measure in finer steps.");
+                AddAt(row, $"the line at {nm[row]} nm has too few rows at or above half of its height, {last - first + 1}, "
+                    + $"{step:0.###} nm apart; at least {FewestSamplesOfALine} are needed for its shape, so measure in finer steps.");
             }
         }
     }
@@ -129,7 +131,8 @@ internal sealed class SpectrumChecks(SpectrumTable table, string column, Spectra
             beyond += curve.Area(Math.Max(nm[0], WavelengthGrid.LastNm), nm[^1]);
         if (total > 0 && beyond > SpectralQuantity.NothingShare * total)
         {
-            Add($"{100 * beyond / total:0.##} % of the light in {column} lies outside {WavelengthGrid.FirstNm} to {WavelengthGrid.LastNm} nm; 0.1 % is allowed, because colours are computed there alone.");
+            Add($"{100 * beyond / total:0.##} % of the light in {column} lies outside {WavelengthGrid.FirstNm} to "
+                + $"{WavelengthGrid.LastNm} nm; 0.1 % is allowed, because colours are computed there alone.");
         }
     }
 
@@ -141,12 +144,13 @@ internal sealed class SpectrumChecks(SpectrumTable table, string column, Spectra
         (double first, double last) = options.NeededNm ?? (WavelengthGrid.FirstNm, WavelengthGrid.LastNm);
         if (nm[0] > first + CoverSlackNm || nm[^1] < last - CoverSlackNm)
         {
-            Add($"{column} reaches from {nm[0]} to {nm[^1]} nm, but there is light from {first} to {last} nm; measure further, or say outside: hold or outside: zero.");
+            Add($"{column} reaches from {nm[0]} to {nm[^1]} nm, but there is light from {first} to {last} nm; measure further, or "
+                + "say outside: hold or outside: zero.");
         }
     }
 
     /// <summary>Adds a fault of the whole column.</summary>
-    public void Add(FormattableString message) => _faults.Add(null, null, message.ToString(CultureInfo.InvariantCulture));
+    public void Add(string message) => _faults.Add(null, null, message);
 
     /// <summary>Throws if anything was found.</summary>
     public void ThrowIfAny()
@@ -159,13 +163,14 @@ internal sealed class SpectrumChecks(SpectrumTable table, string column, Spectra
     {
         if (value > SpectralQuantity.NothingShare * peak)
         {
-            AddAt(row, $"{column} is still {100 * value / peak:0.##} % of its peak at {nm[row]} nm, where the file {end}; it must have fallen to 0.1 %. Measure further, or say outside: zero.");
+            AddAt(row, $"{column} is still {100 * value / peak:0.##} % of its peak at {nm[row]} nm, where the file {end}; it must "
+                + "have fallen to 0.1 %. Measure further, or say outside: zero.");
         }
     }
 
-    private void AddAt(int row, FormattableString message)
+    private void AddAt(int row, string message)
     {
-        InputFault fault = table.FaultAt(row, column, message.ToString(CultureInfo.InvariantCulture));
+        InputFault fault = table.FaultAt(row, column, message);
         _faults.Add(fault.Line, fault.Column, fault.Message);
     }
 

@@ -163,7 +163,8 @@ public static class SpectrumImport
         {
             LinearCurve => "linear between rows",
             SpragueCurve { ReplacedIntervals: 0 } => "Sprague interpolation (CIE 167)",
-            SpragueCurve s => string.Create(CultureInfo.InvariantCulture, $"Sprague interpolation (CIE 167), monotone cubic in {s.ReplacedIntervals} of {nm.Length - 1} intervals where it would have left the values allowed"),
+            SpragueCurve s => string.Create(CultureInfo.InvariantCulture, $"Sprague interpolation (CIE 167), monotone cubic in "
+                + $"{s.ReplacedIntervals} of {nm.Length - 1} intervals where it would have left the values allowed"),
             _ => "monotone cubic interpolation",
         };
         return $"{steps}: {method}{(averaged ? ", averaged over each nm so that areas are kept" : "")}";
@@ -174,9 +175,11 @@ public static class SpectrumImport
         where TUnit : struct, ISpectralUnit
     {
         string outside = nm[0] <= WavelengthGrid.FirstNm && nm[^1] >= WavelengthGrid.LastNm ? ""
-            : string.Create(CultureInfo.InvariantCulture, $"; outside {nm[0]:0.###} to {nm[^1]:0.###} nm {(isLight || options.Outside == OutsideRule.Zero ? "zero" : "the value of the nearest row")}");
+            : string.Create(CultureInfo.InvariantCulture, $"; outside {nm[0]:0.###} to {nm[^1]:0.###} nm "
+                + $"{(isLight || options.Outside == OutsideRule.Zero ? "zero" : "the value of the nearest row")}");
         string[] warnings = noisy == 0 ? []
-            : [string.Create(CultureInfo.InvariantCulture, $"{table.Name}: {noisy} negative {(noisy == 1 ? "value" : "values")} of {column}, none below -0.1 % of the peak, taken as zero.")];
+            : [string.Create(CultureInfo.InvariantCulture, $"{table.Name}: {noisy} negative {(noisy == 1 ? "value" : "values")} of {column}, none "
+                + $"below -0.1 % of the peak, taken as zero.")];
         // No curve leaves the values allowed by more than rounding: an average of ones is one.
         SpectralQuantity quantity = SpectralQuantity.Of<TUnit>();
         samples = [.. samples.Select(s => Math.Clamp(s, quantity.LowestValue, quantity.HighestValue))];

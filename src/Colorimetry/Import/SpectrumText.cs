@@ -68,12 +68,14 @@ internal static class SpectrumText
             else if (c < ' ' && c is not ('\t' or '\r'))
             {
                 throw new InputException(new InputFault(name, line, i - lineStart + 1, string.Create(
-                    CultureInfo.InvariantCulture, $"the byte 0x{(int)c:X2} does not occur in text; this looks like a binary file, a CSV file is needed.")));
+                    CultureInfo.InvariantCulture, $"the byte 0x{(int)c:X2} does not occur in text; this looks like a binary file, a CSV file is "
+                        + $"needed.")));
             }
             else if (i - lineStart >= LongestLine)
             {
                 throw Refused(name, line, string.Create(
-                    CultureInfo.InvariantCulture, $"the line is longer than {LongestLine} characters, the most allowed; a CSV file with one row per wavelength is needed."));
+                    CultureInfo.InvariantCulture, $"the line is longer than {LongestLine} characters, the most allowed; a CSV file with one row per "
+                        + $"wavelength is needed."));
             }
         }
     }
