@@ -21,8 +21,8 @@ internal static class DemoSpectra
         new("red-k31", "red cadmium-based lot K31", PeakNm: 637, FwhmNm: 29, ExcitonNm: 621, WidthEv: 0.038, At450: 3.55, ShellEv: 2.50, Shell: 2.6),
         new("green-p04", "green indium-based lot P04", PeakNm: 531, FwhmNm: 38, ExcitonNm: 501, WidthEv: 0.075, At450: 0.72, ShellEv: 2.95, Shell: 0.2),
         new("green-p09", "green indium-based lot P09", PeakNm: 537, FwhmNm: 41, ExcitonNm: 506, WidthEv: 0.082, At450: 0.68, ShellEv: 2.95, Shell: 0.2),
-        new("red-p15", "red indium-based lot P15", PeakNm: 626, FwhmNm: 40, ExcitonNm: 593, WidthEv: 0.060, At450: 1.21, ShellEv: 2.90, Shell: 0.3),
-        new("red-p18", "red indium-based lot P18", PeakNm: 634, FwhmNm: 44, ExcitonNm: 600, WidthEv: 0.066, At450: 1.28, ShellEv: 2.90, Shell: 0.3),
+        new("red-p15", "red indium-based lot P15", PeakNm: 626, FwhmNm: 40, ExcitonNm: 597, WidthEv: 0.060, At450: 1.21, ShellEv: 2.90, Shell: 0.3),
+        new("red-p18", "red indium-based lot P18", PeakNm: 634, FwhmNm: 44, ExcitonNm: 605, WidthEv: 0.066, At450: 1.28, ShellEv: 2.90, Shell: 0.3),
     ];
 
     /// <summary>Every spectrum file of the demo: name and text.</summary>
@@ -75,7 +75,7 @@ internal static class DemoSpectra
         if (nm <= peakNm)
             return body;
         double beyond = (nm - peakNm) / fwhmNm;
-        return body + (tail * beyond * beyond * Math.Exp(2 * (1 - beyond))); // greatest, and equal to tail, one FWHM beyond the peak
+        return body + (tail * beyond * beyond * Math.Exp(1 - (beyond * beyond))); // greatest, and equal to tail, one FWHM beyond the peak
     }
 
     // Three excitons on a band rising towards the blue, over photon energy; the shell adds to the band.
