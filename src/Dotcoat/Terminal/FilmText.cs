@@ -1,0 +1,59 @@
+using FilmOptics;
+
+namespace Dotcoat.Terminal;
+
+/// <summary>A film's figures for the terminal: the answer, then tables, then warnings and cautions.</summary>
+internal static class FilmText
+{
+    /// <summary>What simulate prints.</summary>
+    public static string Simulated(FilmCase filmCase, FilmAppraisal appraisal)
+    {
+        var text = new TerminalText();
+        text.Paragraph(Whites.Answer(filmCase, appraisal));
+        return Rest(text, filmCase, appraisal);
+    }
+
+    private static string Rest(TerminalText text, FilmCase filmCase, FilmAppraisal appraisal)
+    {
+        text.Paragraph($"Film: {filmCase.Film.Title}. Model: {appraisal.Output.Model}. Observer: {filmCase.Observer.Name}.");
+        text.Gap().Table(["colour", "x", "y", "u′", "v′", "CCT K", "Duv", "lm/W"], [.. Whites.Rows(appraisal)]);
+        text.Gap().Table(["where each source photon goes", "share"], [.. Fates(filmCase, appraisal.Output.Budget)]);
+        text.Gap().Table(["efficiency", "share"], [.. Efficiencies(appraisal.Efficiency)]);
+        text.Gap().Table(
+            ["light above by last emitter", "photons", "peak nm", "FWHM nm"],
+            [.. appraisal.Bands.Select(b => new[] { b.Name, Figure.Fixed(b.Photons, 4), Figure.Fixed(b.PeakNm, 1), Figure.Fixed(b.FwhmNm, 1) })]);
+        text.Gap().Table(
+            ["layer", "thickness µm", "coat g/m²", "optical density"],
+            [.. appraisal.Layers.Select(l => new[] { l.Name, Figure.Fixed(l.ThicknessUm, 1), Figure.Fixed(l.CoatWeightGPerM2, 1), Figure.Fixed(l.OpticalDensity, 3) })]);
+        if (appraisal.Gamut is { Count: > 0 } gamut)
+        {
+            text.Gap().Table(
+                ["panel against", "coverage xy", "coverage u′v′", "area ratio xy", "area ratio u′v′"],
+                [.. gamut.Select(g => new[] { g.Name, Figure.Fixed(g.CoverageXy, 4), Figure.Fixed(g.CoverageUv, 4), Figure.Fixed(g.AreaRatioXy, 4), Figure.Fixed(g.AreaRatioUv, 4) })]);
+        }
+
+        return text.Sentences("Warnings", appraisal.Warnings).ToString();
+    }
+
+    private static IEnumerable<string[]> Fates(FilmCase filmCase, PhotonBudget budget)
+    {
+        yield return ["leaves above unconverted", Figure.Fixed(budget.Unconverted, 4)];
+        yield return ["leaves above converted", Figure.Fixed(budget.Converted, 4)];
+        yield return ["lost below", Figure.Fixed(budget.LostBelow, 4)];
+        yield return ["lost above", Figure.Fixed(budget.LostAbove, 4)];
+        yield return ["lost in the host", Figure.Fixed(budget.LostInHost, 4)];
+        yield return ["lost at the edges", Figure.Fixed(budget.LostAtEdges, 4)];
+        for (int i = 0; i < filmCase.Film.Lots.Count; i++)
+            yield return [$"lost in {filmCase.Film.Lots[i].Name}", Figure.Fixed(budget.LostInLots[i], 4)];
+        yield return ["sum", Figure.Fixed(budget.Sum, 4)];
+    }
+
+    private static IEnumerable<string[]> Efficiencies(FilmEfficiency efficiency)
+    {
+        yield return ["blue leakage, photons", Figure.Fixed(efficiency.BlueLeakagePhotonShare, 4)];
+        yield return ["blue leakage, power", Figure.Fixed(efficiency.BlueLeakagePowerShare, 4)];
+        yield return ["external photon efficiency", Figure.Fixed(efficiency.ExternalPhotonShare, 4)];
+        yield return ["down-conversion efficiency", Figure.Fixed(efficiency.DownConversionShare, 4)];
+        yield return ["energy efficiency", Figure.Fixed(efficiency.EnergyShare, 4)];
+    }
+}

@@ -1,0 +1,233 @@
+using System.Text;
+using System.Text.Encodings.Web;
+using System.Text.Json;
+using Colorimetry;
+using FilmOptics;
+
+namespace FilmReports;
+
+/// <summary>The JSON document of a film, schema dotcoat/1. README.md explains each key.</summary>
+/// <remarks>
+/// Shares are per source photon or source power, in 0…1; spectra per source watt and per source photon. What is not known or not
+/// defined is null, never 0 or NaN. The same film gives the same bytes.
+/// </remarks>
+public static class ReportJson
+{
+    private static readonly JsonWriterOptions Indented = new() { Indented = true, NewLine = "\n", Encoder = JavaScriptEncoder.UnsafeRelaxedJsonEscaping };
+
+    /// <summary>The document of simulate.</summary>
+    /// <param name="filmCase">The film.</param>
+    /// <param name="appraisal">Its figures.</param>
+    public static string Simulate(FilmCase filmCase, FilmAppraisal appraisal)
+    {
+        ArgumentNullException.ThrowIfNull(filmCase);
+        ArgumentNullException.ThrowIfNull(appraisal);
+        return Document(json => WriteFilm(json, filmCase, appraisal));
+    }
+
+    private static string Document(Action<Utf8JsonWriter> write)
+    {
+        using var bytes = new MemoryStream();
+        using (var json = new Utf8JsonWriter(bytes, Indented))
+        {
+            json.WriteStartObject();
+            write(json);
+            json.WriteEndObject();
+        }
+
+        return Encoding.UTF8.GetString(bytes.GetBuffer(), 0, (int)bytes.Length) + "\n";
+    }
+
+    private static void WriteFilm(Utf8JsonWriter json, FilmCase filmCase, FilmAppraisal appraisal)
+    {
+        json.WriteString("schema", "dotcoat/1");
+        json.WriteString("title", filmCase.Film.Title);
+        json.WriteString("model", appraisal.Output.Model);
+        json.WriteStartObject("film");
+        White(json, appraisal.FilmWhite);
+        Number(json, "lumens_per_source_watt", appraisal.FilmLumensPerSourceWatt);
+        json.WriteEndObject();
+        Panel(json, appraisal.Panel);
+        Gamut(json, appraisal.Gamut);
+        Photons(json, "photons", filmCase.Film, appraisal.Output.Budget, appraisal.Output.Budget.Sum);
+        Bands(json, appraisal.Bands);
+        Layers(json, appraisal.Layers);
+        Efficiency(json, appraisal.Efficiency);
+        Spectrum(json, appraisal);
+        if (appraisal.Output.Accuracy is { } accuracy)
+            Accuracy(json, accuracy);
+        if (appraisal.Output.Tracing is { } tracing) // the lines are not independent: their sum has no standard error of its own
+            Photons(json, "standard_error", filmCase.Film, tracing.StandardError, sum: null);
+        json.WriteStartArray("warnings");
+        foreach (string warning in appraisal.Warnings)
+            json.WriteStringValue(warning);
+        json.WriteEndArray();
+    }
+
+    private static void Panel(Utf8JsonWriter json, PanelColours? panel)
+    {
+        if (panel is null)
+        {
+            json.WriteNull("panel");
+            return;
+        }
+
+        json.WriteStartObject("panel");
+        White(json, panel.White);
+        Colour(json, "red", panel.Red);
+        Colour(json, "green", panel.Green);
+        Colour(json, "blue", panel.Blue);
+        Number(json, "lumens_per_source_watt", panel.LumensPerSourceWatt);
+        json.WriteEndObject();
+    }
+
+    private static void Gamut(Utf8JsonWriter json, IReadOnlyList<GamutComparison>? gamut)
+    {
+        if (gamut is null)
+        {
+            json.WriteNull("gamut");
+            return;
+        }
+
+        json.WriteStartArray("gamut");
+        foreach (var standard in gamut)
+        {
+            json.WriteStartObject();
+            json.WriteString("name", standard.Name);
+            Number(json, "coverage_xy", standard.CoverageXy);
+            Number(json, "coverage_uv", standard.CoverageUv);
+            Number(json, "area_ratio_xy", standard.AreaRatioXy);
+            Number(json, "area_ratio_uv", standard.AreaRatioUv);
+            json.WriteEndObject();
+        }
+
+        json.WriteEndArray();
+    }
+
+    private static void Photons(Utf8JsonWriter json, string key, Film film, PhotonBudget budget, double? sum)
+    {
+        json.WriteStartObject(key);
+        Number(json, "unconverted", budget.Unconverted);
+        Number(json, "converted", budget.Converted);
+        Number(json, "lost_below", budget.LostBelow);
+        Number(json, "lost_above", budget.LostAbove);
+        Number(json, "lost_in_host", budget.LostInHost);
+        Number(json, "lost_at_edges", budget.LostAtEdges);
+        ByLot(json, "lost_in_lots", film, budget.LostInLots);
+        ByLot(json, "source_absorbed_by", film, budget.SourceAbsorbedBy);
+        ByLot(json, "excitations", film, budget.Excitations);
+        Number(json, "sum", sum);
+        json.WriteEndObject();
+    }
+
+    private static void ByLot(Utf8JsonWriter json, string key, Film film, IReadOnlyList<double> values)
+    {
+        json.WriteStartObject(key);
+        for (int i = 0; i < film.Lots.Count; i++)
+            Number(json, film.Lots[i].Name, values[i]);
+        json.WriteEndObject();
+    }
+
+    private static void Bands(Utf8JsonWriter json, IReadOnlyList<EmissionBand> bands)
+    {
+        json.WriteStartArray("bands");
+        foreach (var band in bands)
+        {
+            json.WriteStartObject();
+            json.WriteString("name", band.Name);
+            Number(json, "photons", band.Photons);
+            Number(json, "peak_nm", band.PeakNm);
+            Number(json, "fwhm_nm", band.FwhmNm);
+            json.WriteEndObject();
+        }
+
+        json.WriteEndArray();
+    }
+
+    private static void Layers(Utf8JsonWriter json, IReadOnlyList<LayerFigures> layers)
+    {
+        json.WriteStartArray("layers");
+        foreach (var layer in layers)
+        {
+            json.WriteStartObject();
+            json.WriteString("name", layer.Name);
+            Number(json, "thickness_um", layer.ThicknessUm);
+            Number(json, "coat_weight_g_per_m2", layer.CoatWeightGPerM2);
+            Number(json, "optical_density", layer.OpticalDensity);
+            json.WriteEndObject();
+        }
+
+        json.WriteEndArray();
+    }
+
+    private static void Efficiency(Utf8JsonWriter json, FilmEfficiency efficiency)
+    {
+        json.WriteStartObject("efficiency");
+        Number(json, "blue_leakage_photons", efficiency.BlueLeakagePhotonShare);
+        Number(json, "blue_leakage_power", efficiency.BlueLeakagePowerShare);
+        Number(json, "external_photon", efficiency.ExternalPhotonShare);
+        Number(json, "down_conversion", efficiency.DownConversionShare);
+        Number(json, "energy", efficiency.EnergyShare);
+        json.WriteEndObject();
+    }
+
+    private static void Spectrum(Utf8JsonWriter json, FilmAppraisal appraisal)
+    {
+        json.WriteStartObject("spectrum");
+        json.WriteStartArray("wavelength_nm");
+        for (int i = 0; i < WavelengthGrid.Count; i++)
+            json.WriteNumberValue(WavelengthGrid.NmAt(i));
+        json.WriteEndArray();
+        Samples(json, "power_per_nm", appraisal.Power.Samples);
+        Samples(json, "photons_per_nm", appraisal.Output.Total.Samples);
+        json.WriteEndObject();
+    }
+
+    private static void Samples(Utf8JsonWriter json, string key, ReadOnlySpan<double> samples)
+    {
+        json.WriteStartArray(key);
+        foreach (double sample in samples)
+            json.WriteNumberValue(sample);
+        json.WriteEndArray();
+    }
+
+    private static void Accuracy(Utf8JsonWriter json, SolverAccuracy accuracy)
+    {
+        json.WriteStartObject("accuracy");
+        Number(json, "asked", accuracy.AskedShare);
+        Number(json, "estimate", accuracy.EstimateShare);
+        json.WriteNumber("ordinates", accuracy.Ordinates);
+        json.WriteNumber("cells", accuracy.Cells);
+        json.WriteNumber("wavelength_bins", accuracy.WavelengthBins);
+        json.WriteEndObject();
+    }
+
+    private static void White(Utf8JsonWriter json, WhitePoint white)
+    {
+        json.WriteStartObject("white");
+        Number(json, "x", white.Chromaticity.X);
+        Number(json, "y", white.Chromaticity.Y);
+        Number(json, "u_prime", white.Chromaticity.UPrime);
+        Number(json, "v_prime", white.Chromaticity.VPrime);
+        Number(json, "cct_k", white.CctKelvin);
+        Number(json, "duv", white.Duv);
+        json.WriteEndObject();
+    }
+
+    private static void Colour(Utf8JsonWriter json, string key, Chromaticity colour)
+    {
+        json.WriteStartObject(key);
+        Number(json, "x", colour.X);
+        Number(json, "y", colour.Y);
+        json.WriteEndObject();
+    }
+
+    // The writer refuses NaN and infinity itself: neither ever passes for a number.
+    private static void Number(Utf8JsonWriter json, string key, double? value)
+    {
+        if (value is { } number)
+            json.WriteNumber(key, number);
+        else
+            json.WriteNull(key);
+    }
+}
