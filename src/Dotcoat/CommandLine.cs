@@ -59,6 +59,12 @@ internal static class CommandLine
             context.Error.WriteLine("dotcoat: interrupted; nothing was written.");
             return ExitStatus.Interrupted;
         }
+        catch (Exception unforeseen)
+        {
+            // No stack trace for the user; whoever mends it runs the same command under a debugger.
+            context.Error.WriteLine($"dotcoat: a fault of dotcoat itself ({unforeseen.GetType().Name}): {unforeseen.Message}");
+            return ExitStatus.NumericalFailure;
+        }
     }
 
     private static void ReportUsage(ParseResult parsed, TextWriter error)
@@ -82,6 +88,7 @@ internal static class CommandLine
         var root = new RootCommand("Designs display colour-conversion films loaded with quantum dots.")
         {
             SimulateCommand.Create(context),
+            FormulateCommand.Create(context),
             InspectCommand.Create(context),
             StartCommand.Create(context),
         };

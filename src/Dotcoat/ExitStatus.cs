@@ -15,7 +15,7 @@ internal static class ExitStatus
           0    done
           1    done, but a target or a limit is not met; results are printed anyway
           2    bad input or usage; nothing on standard output
-          3    a numerical failure
+          3    a numerical failure, or a fault of dotcoat itself
           130  interrupted
 
         """;

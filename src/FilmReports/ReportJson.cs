@@ -2,6 +2,7 @@ using System.Text;
 using System.Text.Encodings.Web;
 using System.Text.Json;
 using Colorimetry;
+using FilmDesign;
 using FilmOptics;
 
 namespace FilmReports;
@@ -23,6 +24,18 @@ public static class ReportJson
         ArgumentNullException.ThrowIfNull(filmCase);
         ArgumentNullException.ThrowIfNull(appraisal);
         return Document(json => WriteFilm(json, filmCase, appraisal));
+    }
+
+    /// <summary>The document of formulate: that of its film, and the solution.</summary>
+    /// <param name="formulation">The solved, or nearest, film.</param>
+    public static string Formulate(Formulation formulation)
+    {
+        ArgumentNullException.ThrowIfNull(formulation);
+        return Document(json =>
+        {
+            WriteFilm(json, formulation.FilmCase, formulation.Appraisal);
+            Solution(json, formulation);
+        });
     }
 
     private static string Document(Action<Utf8JsonWriter> write)
@@ -62,6 +75,24 @@ public static class ReportJson
         foreach (string warning in appraisal.Warnings)
             json.WriteStringValue(warning);
         json.WriteEndArray();
+    }
+
+    private static void Solution(Utf8JsonWriter json, Formulation formulation)
+    {
+        json.WriteStartObject("solution");
+        json.WriteStartObject("loadings_mg_per_ml");
+        foreach (var lot in formulation.Loadings.GroupBy(l => l.LotName, StringComparer.Ordinal))
+        {
+            foreach (var loading in lot)
+                Number(json, lot.Count() == 1 ? lot.Key : $"{lot.Key} @ {loading.LayerName}", loading.LoadingMgPerMl);
+        }
+
+        json.WriteEndObject();
+        json.WriteBoolean("reached", formulation.Reached);
+        Number(json, "white_error_xy", formulation.WhiteErrorXy);
+        json.WriteString("limit", formulation.Limit);
+        json.WriteNumber("solves", formulation.Solves);
+        json.WriteEndObject();
     }
 
     private static void Panel(Utf8JsonWriter json, PanelColours? panel)

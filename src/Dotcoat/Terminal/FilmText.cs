@@ -1,3 +1,4 @@
+using FilmDesign;
 using FilmOptics;
 
 namespace Dotcoat.Terminal;
@@ -11,6 +12,21 @@ internal static class FilmText
         var text = new TerminalText();
         text.Paragraph(Whites.Answer(filmCase, appraisal));
         return Rest(text, filmCase, appraisal);
+    }
+
+    /// <summary>What formulate prints.</summary>
+    public static string Formulated(Formulation formulation)
+    {
+        var text = new TerminalText();
+        string tolerance = Figure.Digits(formulation.FilmCase.Target!.ToleranceXy, 3);
+        text.Paragraph(formulation.Reached
+            ? $"White is on target: {Figure.Fixed(formulation.WhiteErrorXy, 5)} in xy from it (tolerance {tolerance})."
+            : $"{formulation.Limit} That is {Figure.Fixed(formulation.WhiteErrorXy, 4)} in xy from the target (tolerance {tolerance}).");
+        text.Gap().Table(
+            ["recipe", "layer", "mg/mL"],
+            [.. formulation.Loadings.Select(l => new[] { l.LotName, l.LayerName, Figure.Fixed(l.LoadingMgPerMl, 4) })]);
+        text.Gap().Paragraph(Whites.Answer(formulation.FilmCase, formulation.Appraisal));
+        return Rest(text, formulation.FilmCase, formulation.Appraisal);
     }
 
     private static string Rest(TerminalText text, FilmCase filmCase, FilmAppraisal appraisal)

@@ -15,6 +15,7 @@ public sealed class CommandLineTests
     [Theory]
     [InlineData("")]
     [InlineData("simulate")]
+    [InlineData("formulate")]
     [InlineData("inspect")]
     [InlineData("start")]
     public void Help_OfEveryCommand_ListsTheExitStatuses(string command)
@@ -52,6 +53,7 @@ public sealed class CommandLineTests
 
     [Theory]
     [InlineData("simulate", "spectra/demo/desk-monitor.film.yaml", "--out", "result")]
+    [InlineData("formulate", "spectra/demo/desk-monitor.film.yaml", "--out", "result", "--save", "spectra/demo/new.film.yaml")]
     [InlineData("inspect", "spectra/demo/led-blue-447.csv", "--out", "result")]
     [InlineData("start", "result")]
     public void Interrupted_LeavesNothing(params string[] arguments)
@@ -82,6 +84,7 @@ public sealed class CommandLineTests
 
     [Theory]
     [InlineData("simulate")]
+    [InlineData("formulate")]
     [InlineData("inspect")]
     public void MissingFile_IsOneLine(string command)
     {

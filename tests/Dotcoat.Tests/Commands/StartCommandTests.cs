@@ -1,3 +1,5 @@
+using System.Text.Json.Nodes;
+
 namespace Dotcoat.Tests.Commands;
 
 public sealed class StartCommandTests
@@ -9,6 +11,8 @@ public sealed class StartCommandTests
         workshop.Run("start", "first").AssertDone().AssertPlain();
         string film = "first/my-film.film.yaml";
         workshop.Run("simulate", film).AssertDone().AssertPlain();
+        var solution = JsonNode.Parse(workshop.Run("formulate", film, "--json").AssertDone().Output)!["solution"]!;
+        Assert.InRange((double)solution["white_error_xy"]!, 0, 0.0005);
         Assert.All(Directory.EnumerateFiles(workshop.PathOf("first"), "*.csv"), spectrum => workshop.Run("inspect", spectrum).AssertDone().AssertPlain());
     }
 

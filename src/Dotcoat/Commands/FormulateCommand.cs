@@ -1,0 +1,44 @@
+using System.CommandLine;
+using Colorimetry;
+using Dotcoat.Terminal;
+using FilmDesign;
+using FilmOptics;
+using FilmReports;
+
+namespace Dotcoat.Commands;
+
+/// <summary>dotcoat formulate FILE: the loadings that put white on target.</summary>
+internal static class FormulateCommand
+{
+    public static Command Create(CommandContext context)
+    {
+        var file = FilmCommand.File();
+        var options = new FilmOptions();
+        var save = new Option<string?>("--save") { Description = "Writes the film file with the loadings found.", HelpName = "NEW.film.yaml" };
+        var command = new Command("formulate", "Finds the loadings that put white on target, or says why none can and how near it gets.") { file };
+        options.AddTo(command);
+        command.Options.Add(save);
+        command.SetAction(parsed => Run(context, parsed.GetValue(file)!, options.Read(parsed), parsed.GetValue(save)));
+        return command;
+    }
+
+    private static int Run(CommandContext context, string file, FilmRequest request, string? save)
+    {
+        string path = context.PathOf(file);
+        var saved = save is null ? null : SavedFilm.Plan(path, context.PathOf(save), request.Overrides);
+        var filmCase = FilmFile.Load(path, request.Overrides);
+        if (filmCase.Target is null)
+            throw new InputException(new InputFault(file, null, null, "has no target: formulate needs one (key target, with white_xy)."));
+        var formulation = Progress.While(
+            context, "searching loadings", () => LoadingSolver.Formulate(filmCase, request.Model, context.CancellationToken));
+        saved?.Write(formulation, context.CancellationToken);
+        Delivery.Deliver(
+            context,
+            "formulate",
+            ReportJson.Formulate(formulation),
+            () => FilmText.Formulated(formulation),
+            request.Delivery,
+            () => []);
+        return formulation.Reached ? ExitStatus.Done : ExitStatus.TargetNotMet;
+    }
+}
