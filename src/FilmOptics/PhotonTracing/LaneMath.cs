@@ -1,5 +1,6 @@
 using System.Runtime.CompilerServices;
 using System.Runtime.Intrinsics;
+using System.Runtime.Intrinsics.X86;
 
 namespace FilmOptics.PhotonTracing;
 
@@ -42,4 +43,20 @@ internal static class LaneMath
         p = Vector512.FusedMultiplyAdd(p, square, Vector512.Create(3.1415927f));
         return -(v * p);
     }
+
+    /// <summary>Entries of a table of sixteen, by the index in each lane.</summary>
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    public static Vector512<float> Pick(Vector512<float> table, Vector512<int> index)
+    {
+        // Without 512-bit hardware the general shuffle falls back to memory; two permutes of half tables do not.
+        return Vector512.IsHardwareAccelerated || !Avx2.IsSupported
+            ? Vector512.Shuffle(table, index)
+            : Vector512.Create(PickHalf(table, index.GetLower()), PickHalf(table, index.GetUpper()));
+    }
+
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    private static Vector256<float> PickHalf(Vector512<float> table, Vector256<int> index) => Vector256.ConditionalSelect(
+        Vector256.GreaterThan(index, Vector256.Create(7)).AsSingle(),
+        Avx2.PermuteVar8x32(table.GetUpper(), index),
+        Avx2.PermuteVar8x32(table.GetLower(), index));
 }

@@ -43,10 +43,10 @@ internal static class LaneTracer
             var chance = lanes.NextShare();
             var isUp = Vector512.GreaterThan(cosine, zero);
             var steepness = Vector512.Abs(cosine);
-            var thickness = Vector512.Shuffle(thicknesses, place);
+            var thickness = LaneMath.Pick(thicknesses, place);
             var ahead = Vector512.ConditionalSelect(isUp, thickness - depth, depth);
-            var up = Vector512.Shuffle(ratiosUp, place);
-            var down = Vector512.Shuffle(ratiosDown, place);
+            var up = LaneMath.Pick(ratiosUp, place);
+            var down = LaneMath.Pick(ratiosDown, place);
             var ratio = Vector512.ConditionalSelect(isUp, up, down);
             var rise = steepness * flight;
             var meetsFace = Vector512.GreaterThan(rise, ahead);
@@ -84,7 +84,7 @@ internal static class LaneTracer
             var faceCosine = Vector512.ConditionalSelect(
                 reflects, -cosine, Vector512.ConditionalSelect(isUp, behind, -behind));
             var faceDepth = Vector512.ConditionalSelect(
-                isUp ^ passes, Vector512.Shuffle(thicknesses, nextPlace), zero);
+                isUp ^ passes, LaneMath.Pick(thicknesses, nextPlace), zero);
 
             // In between: scatter, or absorption, which is seldom.
             var innerDepth = Vector512.ConditionalSelect(

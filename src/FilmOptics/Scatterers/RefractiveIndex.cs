@@ -1,0 +1,10 @@
+using Colorimetry;
+
+namespace FilmOptics;
+
+/// <summary>A refractive index, or its absorbing part, against wavelength.</summary>
+public readonly struct RefractiveIndex : ISpectralUnit
+{
+    /// <inheritdoc/>
+    public static string Symbol => "n";
+}
