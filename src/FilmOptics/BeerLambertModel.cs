@@ -1,14 +1,15 @@
+using System.Globalization;
 using Colorimetry;
+using FilmOptics.BeerLambert;
 
 namespace FilmOptics;
 
-/// <summary>The quick model: Beer–Lambert absorption in one well-mixed layer, with every generation of re-absorption.</summary>
+/// <summary>The quick model: Beer–Lambert absorption in one well-mixed layer, with cavity returns and every generation of re-emission.</summary>
 /// <remarks>
-/// <para>It sees no scattering, no faces and no angles beyond a mean path; its warnings name the keys it did not use.</para>
-/// <para>
-/// The light below and above bounces between the outer reflectors in closed form, and J = (I − PΦ)⁻¹ J⁰ sums all generations: the
-/// closed form of the series of Weber and Lambe 1976 (Appl. Opt. 15, 2299) and Batchelder et al. 1979 (Appl. Opt. 18, 3090), from memory.
-/// </para>
+/// <para>Sees no scattering, faces, angles or edges; a warning names the keys of the film file that it did not use. Several layers are mixed
+/// into one, each with its own thickness and path.</para>
+/// <para>The cascade is summed in closed form, J = (I − PΦ)⁻¹ J⁰: the generation series of Weber and Lambe 1976 (Applied Optics 15, 2299) and
+/// Batchelder et al. 1979 (Applied Optics 18, 3090), cited from memory. Each line of the budget comes from its own flux or absorption.</para>
 /// </remarks>
 public sealed class BeerLambertModel : IFilmModel
 {
@@ -18,104 +19,133 @@ public sealed class BeerLambertModel : IFilmModel
     /// <inheritdoc/>
     public string Name => "beer-lambert";
 
-    /// <inheritdoc/>
+    /// <summary>Finds where each source photon goes, in some tens of microseconds.</summary>
+    /// <param name="film">The film.</param>
+    /// <param name="cancellationToken">Not needed: a solve is short.</param>
+    /// <exception cref="InputException">A number is out of its range, or light is caught between perfect mirrors with nothing to end it.</exception>
+    /// <exception cref="NumericalFailureException">The budget does not close within 1e-12, or a figure is not a number.</exception>
     public FilmOutput Solve(Film film, CancellationToken cancellationToken = default)
     {
         ArgumentNullException.ThrowIfNull(film);
-        cancellationToken.ThrowIfCancellationRequested();
-        var (depths, hostDepth) = MixedLayer.Of(film);
-        var paths = BeerLambertPathLengths.Of(film);
-        double? flatReturn = film.Cavity.AboveReflectanceByAngle?.LambertianMean;
-        int lots = film.Lots.Count;
-        var source = film.Backlight.Photons.Samples;
-        double bypass = film.Cavity.BypassShare;
+        CheckedFilm.Require(film);
+
+        double? returnMean = film.Cavity.AboveReflectanceByAngle?.LambertianMean;
+        var above = returnMean is { } mean
+            ? Spectrum.Flat<Fraction>(mean, "mean return above").Samples
+            : film.Cavity.AboveReflectance.Samples;
 
         var unconverted = new double[WavelengthGrid.Count];
-        var emittedOut = new double[WavelengthGrid.Count];
-        var sourceAbsorbed = new double[lots];
-        // Per emitting lot j: shares of one emitted photon. reabsorbed[i, j] is P of physics: absorbed by i, emitted by j.
-        var reabsorbed = new double[lots, lots];
-        var emittedBelow = new double[lots];
-        var emittedAbove = new double[lots];
-        var emittedInHost = new double[lots];
-        double lostBelow = 0, lostAbove = 0, lostInHost = 0;
+        var first = new double[film.Lots.Count];
+        var source = FollowSource(film, above, unconverted, first);
 
-        for (int w = 0; w < WavelengthGrid.Count; w++)
+        var emission = new LotEmission[film.Lots.Count];
+        var again = new double[film.Lots.Count * film.Lots.Count];
+        FollowEmission(film, above, emission, again);
+
+        double[] excitations = [.. first];
+        if (!Cascade.Sum(again, [.. emission.Select(e => e.EndedShare)], excitations))
         {
-            double dots = 0, emission = 0;
-            for (int i = 0; i < lots; i++)
-            {
-                dots += depths[i][w];
-                emission += film.Lots[i].Emission.Samples[w];
-            }
-
-            if (source[w] == 0 && emission == 0)
-                continue;
-            double depth = dots + hostDepth[w];
-            double below = film.Cavity.BelowReflectance.Samples[w];
-            double above = flatReturn ?? film.Cavity.AboveReflectance.Samples[w];
-            double aboveLoss = film.Cavity.AboveAbsorptance.Samples[w];
-            var pump = CavityPass.Outside(depth * paths.PumpFactor, below, above, aboveLoss, w);
-            var light = CavityPass.Inside(depth * paths.EmissionFactor, below, above, aboveLoss, w);
-            emittedOut[w] = light.Out;
-
-            double up = source[w] * (1 - bypass), missed = source[w] * bypass, down = missed * above;
-            unconverted[w] = (up * pump.FromBelow.Out) + (down * pump.FromAbove.Out) + (missed * (1 - above - aboveLoss));
-            lostBelow += (up * pump.FromBelow.LostBelow) + (down * pump.FromAbove.LostBelow);
-            lostAbove += (up * pump.FromBelow.LostAbove) + (down * pump.FromAbove.LostAbove) + (missed * aboveLoss);
-            double absorbed = (up * pump.FromBelow.Absorbed) + (down * pump.FromAbove.Absorbed);
-            double hostShare = depth > 0 ? hostDepth[w] / depth : 0;
-            lostInHost += absorbed * hostShare;
-            for (int i = 0; i < lots; i++)
-            {
-                double share = depth > 0 ? depths[i][w] / depth : 0;
-                sourceAbsorbed[i] += absorbed * share;
-                for (int j = 0; j < lots; j++)
-                    reabsorbed[i, j] += film.Lots[j].Emission.Samples[w] * light.Absorbed * share;
-                double emitted = film.Lots[i].Emission.Samples[w];
-                emittedBelow[i] += emitted * light.LostBelow;
-                emittedAbove[i] += emitted * light.LostAbove;
-                emittedInHost[i] += emitted * light.Absorbed * hostShare;
-            }
+            throw new InputException(new InputFault("cavity", null, null,
+                "emitted light is caught for ever: the returns leave no way out, and yields of 1 and a clear host no end. Lower a return or a yield."));
         }
 
-        var excitations = Cascade.Solve(reabsorbed, [.. film.Lots.Select(lot => lot.FilmYieldShare)], sourceAbsorbed);
-        var converted = new Spectrum<PhotonPerNm>[lots];
-        var lostInLots = new double[lots];
-        double convertedPhotons = 0;
-        for (int j = 0; j < lots; j++)
-        {
-            double photons = film.Lots[j].FilmYieldShare * excitations[j];
-            lostInLots[j] = (1 - film.Lots[j].FilmYieldShare) * excitations[j];
-            lostBelow += photons * emittedBelow[j];
-            lostAbove += photons * emittedAbove[j];
-            lostInHost += photons * emittedInHost[j];
-            var spectrum = new double[WavelengthGrid.Count];
-            var emission = film.Lots[j].Emission.Samples;
-            for (int w = 0; w < spectrum.Length; w++)
-                spectrum[w] = photons * emission[w] * emittedOut[w];
-            converted[j] = Spectrum.FromSamples<PhotonPerNm>(spectrum, $"{film.Lots[j].Name} ({Name})");
-            convertedPhotons += converted[j].Integral;
-        }
-
-        return new FilmOutput
+        return new()
         {
             Model = Name,
-            Unconverted = Spectrum.FromSamples<PhotonPerNm>(unconverted, $"unconverted ({Name})"),
-            ConvertedByLot = converted,
+            Unconverted = Spectrum.FromSamples<PhotonPerNm>(unconverted, "source light above, beer-lambert"),
+            ConvertedByLot = [.. emission.Select((e, i) => e.LightAbove(excitations[i], film.Lots[i].Name))],
             Budget = new PhotonBudget
             {
-                Unconverted = unconverted.Sum(),
-                Converted = convertedPhotons,
-                LostBelow = lostBelow,
-                LostAbove = lostAbove,
-                LostInHost = lostInHost,
-                LostAtEdges = 0, // One mixed layer without faces guides nothing.
-                LostInLots = lostInLots,
-                SourceAbsorbedBy = sourceAbsorbed,
+                Unconverted = source.Out,
+                Converted = Emitted(e => e.Out),
+                LostBelow = source.LostBelow + Emitted(e => e.LostBelow),
+                LostAbove = source.LostAbove + Emitted(e => e.LostAbove),
+                LostInHost = source.LostInHost + Emitted(e => e.LostInHost),
+                LostAtEdges = 0,
+                LostInLots = [.. film.Lots.Select((lot, i) => (1 - lot.FilmYieldShare) * excitations[i])],
+                SourceAbsorbedBy = first,
                 Excitations = excitations,
-            }.RequireClosed(BudgetToleranceShare * Math.Max(1, excitations.Sum())),
-            Warnings = BeerLambertWarnings.For(film),
+            }.RequireClosed(BudgetToleranceShare),
+            Warnings = UnusedKeys.Warnings(film, returnMean),
         };
+
+        double Emitted(Func<LightEnds, double> line)
+        {
+            double sum = 0;
+            for (int i = 0; i < emission.Length; i++)
+                sum += emission[i].YieldShare * excitations[i] * line(emission[i].Ends);
+            return sum;
+        }
+    }
+
+    private static LightEnds FollowSource(Film film, ReadOnlySpan<double> above, Span<double> unconverted, Span<double> absorbed)
+    {
+        Span<double> weights = new double[film.Lots.Count];
+        Span<double> room = stackalloc double[(2 * WavelengthGrid.Count) + CavityFates.Room];
+        var layer = new MixedLayer(film, PathsOf(film, film.BeerLambertPaths?.PumpPathFactor, n => PathFactors.OfSource(film.Backlight.Incidence, n)), weights, room);
+        var fates = new CavityFates(room[(2 * WavelengthGrid.Count)..]);
+        ReadOnlySpan<double> light = film.Backlight.Photons.Samples;
+        if (fates.OfSource(layer.Depth, film.Cavity.BelowReflectance.Samples, above, film.Cavity.AboveAbsorptance.Samples, film.Cavity.BypassShare))
+            RequireAnEnd(film, above, layer.Depth, light, "source light");
+        for (int i = 0; i < unconverted.Length; i++)
+            unconverted[i] = light[i] * fates.Out[i];
+        for (int i = 0; i < absorbed.Length; i++)
+            absorbed[i] = weights[i] * SpectralSum.Of(light, film.Lots[i].Absorbance.Samples, fates.AbsorbedPerDepth);
+        return LightEnds.Of(light, fates, layer.HostDepth);
+    }
+
+    private static void FollowEmission(Film film, ReadOnlySpan<double> above, Span<LotEmission> emission, Span<double> again)
+    {
+        int count = film.Lots.Count;
+        Span<double> weights = new double[count];
+        Span<double> room = stackalloc double[(2 * WavelengthGrid.Count) + CavityFates.Room];
+        var layer = new MixedLayer(film, PathsOf(film, film.BeerLambertPaths?.EmissionPathFactor, PathFactors.Lambertian), weights, room);
+        var fates = new CavityFates(room[(2 * WavelengthGrid.Count)..]);
+        bool caught = fates.OfEmission(layer.Depth, film.Cavity.BelowReflectance.Samples, above, film.Cavity.AboveAbsorptance.Samples);
+        for (int j = 0; j < count; j++)
+        {
+            var lot = film.Lots[j];
+            double yieldShare = lot.FilmYieldShare;
+            if (weights[j] == 0 || yieldShare == 0)
+            {
+                emission[j] = LotEmission.None;
+                continue;
+            }
+
+            ReadOnlySpan<double> light = lot.Emission.Samples;
+            if (caught)
+                RequireAnEnd(film, above, layer.Depth, light, $"light of {lot.Name}");
+            emission[j] = LotEmission.Of(light, fates, layer.HostDepth, yieldShare);
+            double sum = emission[j].Ends.Sum;
+            for (int i = 0; i < count; i++)
+            {
+                double absorbed = weights[i] * SpectralSum.Of(light, film.Lots[i].Absorbance.Samples, fates.AbsorbedPerDepth);
+                again[(i * count) + j] = yieldShare * absorbed;
+                sum += absorbed;
+            }
+
+            // The cascade closes by its construction, so that what goes into it is tested here.
+            if (!(Math.Abs(1 - sum) <= BudgetToleranceShare))
+            {
+                throw new NumericalFailureException(string.Create(
+                    CultureInfo.InvariantCulture, $"The fates of light of {lot.Name} sum to {sum:R}; they have to sum to 1 within {BudgetToleranceShare:g1}."));
+            }
+        }
+    }
+
+    private static double[] PathsOf(Film film, double? given, Func<double, double> byIndex) =>
+        [.. film.Layers.Select(layer => given ?? byIndex(layer.RefractiveIndex))];
+
+    private static void RequireAnEnd(Film film, ReadOnlySpan<double> above, ReadOnlySpan<double> depth, ReadOnlySpan<double> light, string which)
+    {
+        for (int i = 0; i < light.Length; i++)
+        {
+            if (light[i] > 0 && depth[i] == 0 && above[i] == 1 && film.Cavity.BelowReflectance.Samples[i] == 1)
+            {
+                throw new InputException(new InputFault("cavity", null, null, string.Create(
+                    CultureInfo.InvariantCulture,
+                    $"at {WavelengthGrid.NmAt(i)} nm below_reflectance and above_reflectance are both 1 and the film absorbs nothing: {which} can never leave. Lower one of them.")));
+            }
+        }
     }
 }

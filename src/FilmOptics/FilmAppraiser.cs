@@ -10,7 +10,8 @@ public static class FilmAppraiser
     /// <summary>All figures of one result.</summary>
     /// <param name="filmCase">The film and what it is judged by.</param>
     /// <param name="output">A model's result for that film.</param>
-    /// <exception cref="NumericalFailureException">No light leaves above, so there is nothing to judge.</exception>
+    /// <remarks>Under a normal view colours are those of the radiance along the normal; lumens stay those of all light leaving above.</remarks>
+    /// <exception cref="InputException">No light leaves above, so there is nothing to judge; or the view is normal and the model has no angles.</exception>
     public static FilmAppraisal Appraise(FilmCase filmCase, FilmOutput output)
     {
         ArgumentNullException.ThrowIfNull(filmCase);
@@ -20,9 +21,12 @@ public static class FilmAppraiser
         var unconverted = output.Unconverted.ToPower().ScaledBy(1 / sourceEnergy);
         Spectrum<WattPerNm>[] converted = [.. output.ConvertedByLot.Select(lot => lot.ToPower().ScaledBy(1 / sourceEnergy))];
         var power = converted.Aggregate(unconverted, (sum, lot) => sum + lot);
-        var panel = filmCase.Panel is { } p ? ColoursBehind(p, power, filmCase.Observer) : null;
-        var light = Tristimulus.Of(power, filmCase.Observer);
-        RequireColour(light, "No light leaves above the film");
+        bool isNormalView = filmCase.Target?.View == TargetView.Normal;
+        var judged = isNormalView ? WhiteMeter.RadianceAlongNormal(output).ToPower() : power;
+        double lumens = Tristimulus.Of(power, filmCase.Observer).Y;
+        var light = Tristimulus.Of(judged, filmCase.Observer);
+        RequireColour(light, "cavity", "no light leaves above the film, so it has no colour; lower above_reflectance + above_absorptance, or make the film absorb less.");
+        var panel = filmCase.Panel is { } p ? ColoursBehind(p, judged, power, filmCase.Observer) : null;
         return new FilmAppraisal
         {
             Output = output,
@@ -30,7 +34,7 @@ public static class FilmAppraiser
             UnconvertedPower = unconverted,
             ConvertedPowerByLot = converted,
             FilmWhite = White(light),
-            FilmLumensPerSourceWatt = light.Y,
+            FilmLumensPerSourceWatt = lumens,
             Panel = panel,
             Gamut = panel is null ? null : Compare(panel, filmCase.Target?.Gamuts is { Count: > 0 } names ? names : DefaultGamuts),
             Bands =
@@ -44,26 +48,34 @@ public static class FilmAppraiser
         };
     }
 
-    private static PanelColours ColoursBehind(Panel panel, Spectrum<WattPerNm> power, StandardObserver observer)
+    private static PanelColours ColoursBehind(
+        Panel panel, Spectrum<WattPerNm> judged, Spectrum<WattPerNm> power, StandardObserver observer)
     {
         var red = Behind(panel.Red, panel.RedAreaShare, "red");
         var green = Behind(panel.Green, panel.GreenAreaShare, "green");
         var blue = Behind(panel.Blue, panel.BlueAreaShare, "blue");
-        var white = red + green + blue;
-        return new(White(white), red.Chromaticity, green.Chromaticity, blue.Chromaticity, white.Y);
+        double lumens = ReferenceEquals(judged, power)
+            ? (red + green + blue).Y
+            : Through(power, panel.Red, panel.RedAreaShare).Y
+                + Through(power, panel.Green, panel.GreenAreaShare).Y
+                + Through(power, panel.Blue, panel.BlueAreaShare).Y;
+        return new(White(red + green + blue), red.Chromaticity, green.Chromaticity, blue.Chromaticity, lumens);
 
         Tristimulus Behind(Spectrum<Fraction> filter, double areaShare, string name)
         {
-            var colour = Tristimulus.Of((power * filter).ScaledBy(areaShare), observer);
-            RequireColour(colour, $"No light passes the {name} filter");
+            var colour = Through(judged, filter, areaShare);
+            RequireColour(colour, "panel", $"no light passes the {name} filter, so the panel has no {name}; check filters and area_shares, and that the film sends light there.");
             return colour;
         }
+
+        Tristimulus Through(Spectrum<WattPerNm> light, Spectrum<Fraction> filter, double areaShare) =>
+            Tristimulus.Of((light * filter).ScaledBy(areaShare), observer);
     }
 
-    private static void RequireColour(Tristimulus light, string finding)
+    private static void RequireColour(Tristimulus light, string key, string finding)
     {
         if (!light.HasColour)
-            throw new NumericalFailureException($"{finding}, so it has no colour. Check the cavity, the filters and the spectrum.");
+            throw new InputException(new InputFault(key, null, null, finding));
     }
 
     private static WhitePoint White(Tristimulus light)

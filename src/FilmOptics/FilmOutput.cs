@@ -27,6 +27,12 @@ public sealed record FilmOutput
     /// <summary>Emitted light leaving above by last emitting lot, in the order of <see cref="Film.Lots"/>.</summary>
     public required IReadOnlyList<Spectrum<PhotonPerNm>> ConvertedByLot { get; init; }
 
+    /// <summary>
+    /// The film's own light along the normal, before the sheets above: photons per source photon, nm and steradian. Null from a model
+    /// without angles, and for a collimated source. What <see cref="TargetView.Normal"/> judges.
+    /// </summary>
+    public Spectrum<PhotonPerNm>? NormalRadiance { get; init; }
+
     /// <summary>Where every photon went.</summary>
     public required PhotonBudget Budget { get; init; }
 

@@ -9,9 +9,10 @@ public sealed class WhiteMeter
     private readonly double[] _x = new double[WavelengthGrid.Count];
     private readonly double[] _y = new double[WavelengthGrid.Count];
     private readonly double[] _z = new double[WavelengthGrid.Count];
+    private readonly TargetView _view;
 
     /// <summary>A meter for one film case.</summary>
-    /// <param name="filmCase">Gives the observer and the panel.</param>
+    /// <param name="filmCase">Gives the observer, the panel and the target's view.</param>
     /// <param name="place">Film or panel.</param>
     /// <exception cref="ArgumentException">The panel is asked for and there is none.</exception>
     public WhiteMeter(FilmCase filmCase, TargetPlace place)
@@ -19,6 +20,7 @@ public sealed class WhiteMeter
         ArgumentNullException.ThrowIfNull(filmCase);
         if (place == TargetPlace.Panel && filmCase.Panel is null)
             throw new ArgumentException("White at the panel needs a panel.", nameof(place));
+        _view = filmCase.Target?.View ?? TargetView.Hemisphere;
         var panel = place == TargetPlace.Panel ? filmCase.Panel : null;
         for (int i = 0; i < _x.Length; i++)
         {
@@ -32,30 +34,30 @@ public sealed class WhiteMeter
         }
     }
 
-    /// <summary>Tristimulus values of all light leaving above, on a scale of the meter's own: only ratios count.</summary>
+    /// <summary>Tristimulus values of the light that the target's view judges, on a scale of the meter's own: only ratios count.</summary>
+    /// <exception cref="InputException">The view is normal and the model has no angles.</exception>
     public Tristimulus Read(FilmOutput output)
     {
         ArgumentNullException.ThrowIfNull(output);
+        if (_view == TargetView.Normal)
+            return Read(RadianceAlongNormal(output));
         var sum = Read(output.Unconverted);
         foreach (var lot in output.ConvertedByLot)
             sum += Read(lot);
         return sum;
     }
 
+    /// <summary>What a spot meter along the normal receives.</summary>
+    /// <exception cref="InputException">The model has no angles.</exception>
+    internal static Spectrum<PhotonPerNm> RadianceAlongNormal(FilmOutput output) => output.NormalRadiance ?? throw new InputException(new InputFault(
+        "target.view", null, null,
+        $"normal asks for the radiance along the normal, which {output.Model} does not give; set hemisphere, or take a model with angles."));
+
     /// <summary>Tristimulus values of one light, on the same scale.</summary>
     /// <param name="light">Photons in each bin.</param>
     public Tristimulus Read(Spectrum<PhotonPerNm> light)
     {
         ArgumentNullException.ThrowIfNull(light);
-        double x = 0, y = 0, z = 0;
-        var samples = light.Samples;
-        for (int i = 0; i < samples.Length; i++)
-        {
-            x += samples[i] * _x[i];
-            y += samples[i] * _y[i];
-            z += samples[i] * _z[i];
-        }
-
-        return new(x, y, z);
+        return new(SpectralSum.Of(light.Samples, _x), SpectralSum.Of(light.Samples, _y), SpectralSum.Of(light.Samples, _z));
     }
 }
