@@ -66,7 +66,7 @@ public sealed class PhotonTracingModel : IFilmModel
     /// <summary>Whether photons are traced in vector lanes: nearly always.</summary>
     internal static bool UsesLanes(Film film) => film.Layers.Count <= LaneFilm.MostLayers;
 
-    private static void TraceBlock(TracedFilm film, LaneFilm? lanes, Xoshiro256 random, int photons, Tally into)
+    internal static void TraceBlock(TracedFilm film, LaneFilm? lanes, Xoshiro256 random, int photons, Tally into)
     {
         if (lanes is null)
             ScalarTracer.Trace(film, random, photons, into);
