@@ -1,0 +1,148 @@
+using System.Globalization;
+using FilmOptics;
+using FilmReports.Drawings;
+
+namespace FilmReports.Charts;
+
+/// <summary>Where every source photon goes: one photon in on the left, light out on the right, losses downward; widths add up.</summary>
+internal static class FatesChart
+{
+    /// <summary>Losses below this share are drawn together.</summary>
+    internal const double PooledShare = 0.005;
+
+    private const double FullWidth = 190, Top = 60, Left = 40, Right = 470;
+
+    /// <summary>A stream of the picture.</summary>
+    /// <param name="Name">What becomes of the photons.</param>
+    /// <param name="Share">Per source photon.</param>
+    /// <param name="Colour">#rrggbb.</param>
+    /// <param name="LeavesAbove">Light out, or a loss.</param>
+    /// <param name="Mark">Sign of the light; null for a loss.</param>
+    internal sealed record Stream(string Name, double Share, string Colour, bool LeavesAbove, LightMark? Mark);
+
+    public static Drawing Of(FilmCase filmCase, FilmAppraisal appraisal, Palette palette)
+    {
+        var streams = Streams(filmCase, appraisal, palette);
+        var marks = new List<Mark>
+        {
+            new Words("Where each source photon goes", new(Left, 26), TextAnchor.Start, 13, TextWeight.SemiBold, palette.Ink),
+            new Words(string.Create(CultureInfo.InvariantCulture, $"sum of all shares {appraisal.Output.Budget.Sum:0.000000}"), new(600, 26), TextAnchor.End, 9.5, TextWeight.Regular, palette.Faint),
+            new Words("1 source photon", new(Left, Top - 10), TextAnchor.Start, 10, TextWeight.Regular, palette.Ink),
+        };
+        double total = streams.Sum(s => s.Share), y = Top;
+        Stream[] outputs = [.. streams.Where(s => s.LeavesAbove)], losses = [.. streams.Where(s => !s.LeavesAbove)];
+        double outWidth = outputs.Sum(s => s.Share) * FullWidth / total;
+        double gap = 14, outY = Top;
+        foreach (var stream in outputs)
+        {
+            double width = stream.Share / total * FullWidth;
+            marks.Add(Ribbon(y, outY, width, stream.Colour));
+            var label = new Spot(Right + 26, outY + Math.Max(width / 2, 4));
+            if (stream.Mark is { } mark)
+                marks.Add(SpectrumChart.Sign(mark, new(Right + 12, label.Y), 4, stream.Colour));
+            marks.Add(new Words(stream.Name, new(label.X, label.Y - 1), TextAnchor.Start, 10, TextWeight.SemiBold, palette.Ink));
+            marks.Add(new Words(Percent(stream.Share), new(label.X, label.Y + 11), TextAnchor.Start, 9.5, TextWeight.Regular, palette.Ink));
+            y += width;
+            outY += Math.Max(width, 14) + gap;
+        }
+
+        // Losses bend downward, the lowest first so that no two cross.
+        double bottom = Math.Max(Top + FullWidth, outY - gap) + 46;
+        double x = Left + 70;
+        double lossTop = Top + outWidth;
+        double lossHeight = FullWidth - outWidth;
+        double slot = Math.Max(62, (Right - x) / Math.Max(1, losses.Length));
+        for (int i = 0; i < losses.Length; i++)
+        {
+            double width = losses[i].Share / total * FullWidth;
+            double from = lossTop + lossHeight - width;
+            marks.Add(Downward(from, x, width, bottom, losses[i].Colour));
+            double labelX = x + (width / 2);
+            string[] lines = losses[i].Name.Split('|');
+            for (int line = 0; line < lines.Length; line++)
+                marks.Add(new Words(lines[line], new(labelX, bottom + 16 + (line * 11)), TextAnchor.Middle, 9, TextWeight.Regular, palette.Ink));
+            marks.Add(new Words(Percent(losses[i].Share), new(labelX, bottom + 16 + (lines.Length * 11)), TextAnchor.Middle, 9.5, TextWeight.SemiBold, palette.Ink));
+            lossHeight -= width;
+            x += Math.Max(slot, width + 20);
+        }
+
+        marks.Insert(3, new Shape([new(Left - 14, Top), new(Left, Top), new(Left, Top + FullWidth), new(Left - 14, Top + FullWidth), new(Left - 6, Top + (FullWidth / 2))], Closed: true, palette.Source, 0.9, null));
+        return new Drawing(
+            "photon-fates",
+            "Where each source photon goes",
+            string.Join(' ', streams.Select(s => $"{s.Name.Replace('|', ' ')}: {Percent(s.Share)}.")),
+            Math.Max(640, x + 10),
+            bottom + 62,
+            marks);
+    }
+
+    /// <summary>The streams: light out by emitter, then losses, with those below 0.5 % pooled, never dropped.</summary>
+    internal static IReadOnlyList<Stream> Streams(FilmCase filmCase, FilmAppraisal appraisal, Palette palette)
+    {
+        var budget = appraisal.Output.Budget;
+        var streams = new List<Stream> { new("unconverted", budget.Unconverted, palette.Source, true, LightMark.Triangle) };
+        for (int i = 0; i < filmCase.Film.Lots.Count; i++)
+        {
+            var light = appraisal.Output.ConvertedByLot[i];
+            if (light.Integral <= 0)
+                continue;
+            var (colour, _, mark) = palette.OfEmitter(SpectrumChart.PeakNm(light));
+            streams.Add(new(filmCase.Film.Lots[i].Name, light.Integral, colour, true, mark));
+        }
+
+        var losses = new List<Stream>
+        {
+            Loss("lost below", budget.LostBelow),
+            Loss("lost above", budget.LostAbove),
+            Loss("lost in host", budget.LostInHost),
+            Loss("lost at edges", budget.LostAtEdges),
+        };
+        losses.AddRange(filmCase.Film.Lots.Select((lot, i) => Loss($"not emitted by|{lot.Name}", budget.LostInLots[i])));
+        streams.AddRange(losses.Where(l => l.Share >= PooledShare));
+        double pooled = losses.Where(l => l.Share < PooledShare).Sum(l => l.Share);
+        if (pooled > 0)
+            streams.Add(Loss("other losses", pooled));
+        return streams;
+
+        Stream Loss(string name, double share) => new(name, share, palette.Faint, false, null);
+    }
+
+    private static Shape Ribbon(double fromY, double toY, double width, string colour)
+    {
+        const int Steps = 24;
+        var upper = new List<Spot>();
+        var lower = new List<Spot>();
+        for (int i = 0; i <= Steps; i++)
+        {
+            double t = i / (double)Steps, ease = t * t * (3 - (2 * t));
+            double x = Left + (t * (Right - Left)), y = fromY + ((toY - fromY) * ease);
+            upper.Add(new(x, y));
+            lower.Add(new(x, y + width));
+        }
+
+        lower.Reverse();
+        return new Shape([.. upper, .. lower], Closed: true, colour, 0.45, null);
+    }
+
+    // A quarter turn: along the stream, then down, ending in an arrow's width of its own share.
+    private static Shape Downward(double fromY, double toX, double width, double bottom, string colour)
+    {
+        const int Steps = 14;
+        double radius = 16;
+        var outer = new List<Spot> { new(Left, fromY) };
+        var inner = new List<Spot> { new(Left, fromY + width) };
+        for (int i = 0; i <= Steps; i++)
+        {
+            double angle = i * Math.PI / 2 / Steps;
+            outer.Add(new(toX - radius + ((radius + width) * Math.Sin(angle)), fromY + radius + width - ((radius + width) * Math.Cos(angle))));
+            inner.Add(new(toX - radius + (radius * Math.Sin(angle)), fromY + radius + width - (radius * Math.Cos(angle))));
+        }
+
+        outer.Add(new(toX + width, bottom));
+        inner.Add(new(toX, bottom));
+        inner.Reverse();
+        return new Shape([.. outer, .. inner], Closed: true, colour, 0.3, null);
+    }
+
+    private static string Percent(double share) => string.Create(CultureInfo.InvariantCulture, $"{share * 100:0.0}\u2009%");
+}

@@ -1,0 +1,105 @@
+using System.Globalization;
+
+namespace FilmReports.Drawings;
+
+/// <summary>A field with two linear axes inside a drawing, and the marks drawn on it.</summary>
+internal sealed class Plot
+{
+    private const double TickSize = 9.5, TitleSize = 10.5;
+    private readonly Palette _palette;
+    private readonly List<Mark> _marks = [];
+    private readonly List<Mark> _inside = [];
+
+    /// <summary>An empty field.</summary>
+    /// <param name="palette">Colours.</param>
+    /// <param name="field">Where the axes stand, points.</param>
+    /// <param name="x">Range from left to right.</param>
+    /// <param name="y">Range from bottom to top.</param>
+    /// <param name="labelArea">Where labels may go; the field itself unless given.</param>
+    public Plot(Palette palette, Box field, (double From, double To) x, (double From, double To) y, Box? labelArea = null)
+    {
+        (_palette, Field, X, Y) = (palette, field, x, y);
+        Labels = new LabelPlacer(labelArea ?? field);
+    }
+
+    /// <summary>Where the axes stand.</summary>
+    public Box Field { get; }
+
+    /// <summary>Range from left to right.</summary>
+    public (double From, double To) X { get; }
+
+    /// <summary>Range from bottom to top.</summary>
+    public (double From, double To) Y { get; }
+
+    /// <summary>Places labels on this field.</summary>
+    public LabelPlacer Labels { get; }
+
+    /// <summary>Everything drawn, in order: what is clipped to the field first, then axes and labels.</summary>
+    public IReadOnlyList<Mark> Marks => [new Window(Field.Corners, [.. _inside]), .. _marks];
+
+    /// <summary>Where a point of the axes lies in the drawing.</summary>
+    public Spot At(double x, double y) => new(
+        Field.Left + ((x - X.From) / (X.To - X.From) * (Field.Right - Field.Left)),
+        Field.Bottom - ((y - Y.From) / (Y.To - Y.From) * (Field.Bottom - Field.Top)));
+
+    /// <summary>Adds marks that are cut off at the field.</summary>
+    public void Inside(params IEnumerable<Mark> marks) => _inside.AddRange(marks);
+
+    /// <summary>Adds marks that may stand anywhere.</summary>
+    public void Over(params IEnumerable<Mark> marks) => _marks.AddRange(marks);
+
+    /// <summary>A line through points of the axes.</summary>
+    public void Line(IEnumerable<(double X, double Y)> points, Stroke stroke) =>
+        Inside(new Shape([.. points.Select(p => At(p.X, p.Y))], Closed: false, null, 1, stroke));
+
+    /// <summary>Hairline grid, tick labels and titles.</summary>
+    /// <param name="stepX">Distance of ticks.</param>
+    /// <param name="titleX">Title with unit.</param>
+    /// <param name="stepY">Distance of ticks.</param>
+    /// <param name="titleY">Title with unit.</param>
+    /// <param name="format">How ticks are written.</param>
+    /// <param name="formatY">How ticks of the upright axis are written; as the other unless given.</param>
+    public void Axes(double stepX, string titleX, double stepY, string titleY, string format, string? formatY = null)
+    {
+        var hair = new Stroke(_palette.Hairline, 0.7);
+        foreach (double x in Ticks(X, stepX))
+        {
+            var foot = At(x, Y.From);
+            Inside(new Shape([foot, At(x, Y.To)], Closed: false, null, 1, hair));
+            Over(new Words(Number(x, format), new(foot.X, Field.Bottom + 13), TextAnchor.Middle, TickSize, TextWeight.Regular, _palette.Faint));
+        }
+
+        double widest = 0;
+        foreach (double y in Ticks(Y, stepY))
+        {
+            var foot = At(X.From, y);
+            string text = Number(y, formatY ?? format);
+            widest = Math.Max(widest, InterFont.WidthOf(text, TickSize, TextWeight.Regular));
+            Inside(new Shape([foot, At(X.To, y)], Closed: false, null, 1, hair));
+            Over(new Words(text, new(Field.Left - 6, foot.Y + 3.4), TextAnchor.End, TickSize, TextWeight.Regular, _palette.Faint));
+        }
+
+        Over(
+            new Shape([new(Field.Left, Field.Top), new(Field.Left, Field.Bottom), new(Field.Right, Field.Bottom)], Closed: false, null, 1, new Stroke(_palette.Ink, 0.9)),
+            new Words(titleX, new((Field.Left + Field.Right) / 2, Field.Bottom + 29), TextAnchor.Middle, TitleSize, TextWeight.Regular, _palette.Ink),
+            new Words(titleY, new(Field.Left - widest - 14, (Field.Top + Field.Bottom) / 2), TextAnchor.Middle, TitleSize, TextWeight.Regular, _palette.Ink, TurnDeg: -90));
+    }
+
+    /// <summary>A step of 1, 2 or 5 times a power of ten that gives about that many ticks.</summary>
+    public static double NiceStep(double span, int ticks)
+    {
+        double raw = span / ticks, power = Math.Pow(10, Math.Floor(Math.Log10(raw)));
+        double lead = raw / power;
+        return power * (lead <= 1 ? 1 : lead <= 2 ? 2 : lead <= 5 ? 5 : 10);
+    }
+
+    private static IEnumerable<double> Ticks((double From, double To) range, double step)
+    {
+        double slack = step * 1e-9;
+        for (double i = Math.Ceiling((range.From - slack) / step); i * step <= range.To + slack; i++)
+            yield return i * step;
+    }
+
+    private static string Number(double value, string format) =>
+        value.ToString(format, CultureInfo.InvariantCulture).Replace('-', '\u2212');
+}

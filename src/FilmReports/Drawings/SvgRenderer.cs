@@ -1,0 +1,135 @@
+using System.Globalization;
+using System.Text;
+using System.Xml;
+
+namespace FilmReports.Drawings;
+
+/// <summary>Writes a drawing as SVG with selectable text and a title and description for screen readers.</summary>
+internal static class SvgRenderer
+{
+    private const string SvgNamespace = "http://www.w3.org/2000/svg";
+
+    /// <summary>The drawing as an SVG document (or, inside a page, as an element).</summary>
+    /// <param name="drawing">What to draw.</param>
+    /// <param name="ground">Colour of the paper, #rrggbb.</param>
+    /// <param name="standalone">Whether an XML declaration goes in front.</param>
+    public static string Write(Drawing drawing, string ground, bool standalone)
+    {
+        var text = new StringBuilder();
+        var settings = new XmlWriterSettings { OmitXmlDeclaration = true, Indent = true, IndentChars = " ", NewLineChars = "\n" };
+        using (var svg = XmlWriter.Create(text, settings))
+        {
+            svg.WriteStartElement("svg", SvgNamespace);
+            svg.WriteAttributeString("viewBox", $"0 0 {N(drawing.Width)} {N(drawing.Height)}");
+            svg.WriteAttributeString("role", "img");
+            svg.WriteAttributeString("aria-labelledby", $"{drawing.Name}-title {drawing.Name}-desc");
+            svg.WriteAttributeString("font-family", "Inter, 'Segoe UI', 'Helvetica Neue', Arial, 'DejaVu Sans', sans-serif");
+            Element(svg, "title", $"{drawing.Name}-title", drawing.Title);
+            Element(svg, "desc", $"{drawing.Name}-desc", drawing.Description);
+            svg.WriteStartElement("rect");
+            svg.WriteAttributeString("width", N(drawing.Width));
+            svg.WriteAttributeString("height", N(drawing.Height));
+            svg.WriteAttributeString("fill", ground);
+            svg.WriteEndElement();
+            int windows = 0;
+            Draw(svg, drawing.Name, drawing.Marks, ref windows);
+            svg.WriteEndElement();
+        }
+
+        return (standalone ? "<?xml version=\"1.0\" encoding=\"utf-8\"?>\n" : "") + text + "\n";
+    }
+
+    private static void Element(XmlWriter svg, string name, string id, string text)
+    {
+        svg.WriteStartElement(name);
+        svg.WriteAttributeString("id", id);
+        svg.WriteString(text);
+        svg.WriteEndElement();
+    }
+
+    private static void Draw(XmlWriter svg, string name, IEnumerable<Mark> marks, ref int windows)
+    {
+        foreach (var mark in marks)
+        {
+            switch (mark)
+            {
+                case Shape shape:
+                    svg.WriteStartElement(shape.Closed ? "polygon" : "polyline");
+                    svg.WriteAttributeString("points", string.Join(' ', shape.Spots.Select(s => $"{N(s.X)},{N(s.Y)}")));
+                    FillAndStroke(svg, shape.Fill, shape.FillOpacity, shape.Stroke);
+                    svg.WriteEndElement();
+                    break;
+                case Disc disc:
+                    svg.WriteStartElement("circle");
+                    svg.WriteAttributeString("cx", N(disc.Centre.X));
+                    svg.WriteAttributeString("cy", N(disc.Centre.Y));
+                    svg.WriteAttributeString("r", N(disc.Radius));
+                    FillAndStroke(svg, disc.Fill, 1, disc.Stroke);
+                    svg.WriteEndElement();
+                    break;
+                case Words words:
+                    Write(svg, words);
+                    break;
+                case Window window:
+                    string id = $"{name}-window-{++windows}";
+                    svg.WriteStartElement("clipPath");
+                    svg.WriteAttributeString("id", id);
+                    svg.WriteStartElement("polygon");
+                    svg.WriteAttributeString("points", string.Join(' ', window.Outline.Select(s => $"{N(s.X)},{N(s.Y)}")));
+                    svg.WriteEndElement();
+                    svg.WriteEndElement();
+                    svg.WriteStartElement("g");
+                    svg.WriteAttributeString("clip-path", $"url(#{id})");
+                    Draw(svg, name, window.Marks, ref windows);
+                    svg.WriteEndElement();
+                    break;
+                default:
+                    throw new NotSupportedException(mark.GetType().Name);
+            }
+        }
+    }
+
+    private static void FillAndStroke(XmlWriter svg, string? fill, double fillOpacity, Stroke? stroke)
+    {
+        svg.WriteAttributeString("fill", fill ?? "none");
+        if (fill is not null && fillOpacity < 1)
+            svg.WriteAttributeString("fill-opacity", N(fillOpacity));
+        if (stroke is null)
+            return;
+        svg.WriteAttributeString("stroke", stroke.Colour);
+        svg.WriteAttributeString("stroke-width", N(stroke.Width));
+        svg.WriteAttributeString("stroke-linejoin", "round");
+        if (stroke.Dash is { } dash)
+            svg.WriteAttributeString("stroke-dasharray", string.Join(' ', dash.Select(N)));
+        if (stroke.Opacity < 1)
+            svg.WriteAttributeString("stroke-opacity", N(stroke.Opacity));
+    }
+
+    private static void Write(XmlWriter svg, Words words)
+    {
+        svg.WriteStartElement("text");
+        svg.WriteAttributeString("x", N(words.At.X));
+        svg.WriteAttributeString("y", N(words.At.Y));
+        svg.WriteAttributeString("font-size", N(words.Size));
+        if (words.Weight == TextWeight.SemiBold)
+            svg.WriteAttributeString("font-weight", "600");
+        if (words.Anchor != TextAnchor.Start)
+            svg.WriteAttributeString("text-anchor", words.Anchor == TextAnchor.Middle ? "middle" : "end");
+        svg.WriteAttributeString("fill", words.Colour);
+        if (words.TurnDeg != 0)
+            svg.WriteAttributeString("transform", $"rotate({N(words.TurnDeg)} {N(words.At.X)} {N(words.At.Y)})");
+        if (words.Halo is { } halo)
+        {
+            svg.WriteAttributeString("stroke", halo);
+            svg.WriteAttributeString("stroke-width", "2.5");
+            svg.WriteAttributeString("stroke-opacity", "0.85");
+            svg.WriteAttributeString("stroke-linejoin", "round");
+            svg.WriteAttributeString("paint-order", "stroke");
+        }
+
+        svg.WriteString(words.Text);
+        svg.WriteEndElement();
+    }
+
+    private static string N(double number) => Math.Round(number, 2).ToString("0.##", CultureInfo.InvariantCulture);
+}
