@@ -19,8 +19,7 @@ internal static class ChromaticityChart
         Locus(plot, diagram, palette);
         plot.Axes(0.1, xy ? "x" : "u′", 0.1, xy ? "y" : "v′", "0.0");
         Planckian(plot, diagram, palette, labelled: true);
-        foreach (var standard in Standards(filmCase))
-            Standard(plot, standard, diagram, palette);
+        StandardTriangles(plot, [.. Standards(filmCase)], appraisal, diagram, palette);
         if (appraisal.Panel is { } panel)
             plot.Inside(new Shape([.. new[] { panel.Red, panel.Green, panel.Blue }.Select(c => At(plot, diagram, c))], Closed: true, palette.Ink, 0.08, new Stroke(palette.Ink, 1.8)));
         Whites(plot, filmCase, appraisal, diagram, palette, labelled: false);
@@ -57,7 +56,7 @@ internal static class ChromaticityChart
         var srgb = ColourGamut.Named("BT.709");
         plot.Inside(
             new Shape(locus, Closed: true, null, 1, new Stroke(palette.Ink, 1.1)),
-            new Shape([At(plot, diagram, srgb.Red), At(plot, diagram, srgb.Green), At(plot, diagram, srgb.Blue)], Closed: true, null, 1, new Stroke(palette.Faint, 0.8, [1, 2.5])));
+            new Shape([At(plot, diagram, srgb.Red), At(plot, diagram, srgb.Green), At(plot, diagram, srgb.Blue)], Closed: true, null, 1, new Stroke(palette.Faint, 2.2, [1.2, 3])));
         foreach (int nm in LabelledNm)
         {
             var on = At(plot, diagram, Monochromatic(observer, nm));
@@ -88,32 +87,15 @@ internal static class ChromaticityChart
         }
     }
 
-    private static void Standard(Plot plot, ColourGamut standard, ChromaticityDiagram diagram, Palette palette)
+    private static void StandardTriangles(Plot plot, IReadOnlyList<ColourGamut> standards, FilmAppraisal appraisal, ChromaticityDiagram diagram, Palette palette)
     {
-        var (red, green, blue) = (At(plot, diagram, standard.Red), At(plot, diagram, standard.Green), At(plot, diagram, standard.Blue));
-        plot.Inside(new Shape([red, green, blue], Closed: true, null, 1, new Stroke(palette.Ink, 0.7)));
-        // The name stands along the edge from green to red, a fifth of the way down, or where there is room.
-        plot.Over(AlongEdge(plot.Labels, standard.Name, green, red, palette));
-    }
-
-    private static IEnumerable<Mark> AlongEdge(LabelPlacer labels, string name, Spot green, Spot red, Palette palette)
-    {
-        double dx = red.X - green.X, dy = red.Y - green.Y, length = Math.Sqrt((dx * dx) + (dy * dy));
-        double width = InterFont.WidthOf(name, 8.5, TextWeight.Regular);
-        for (double share = 0.12; share < 0.9; share += 0.04)
-        {
-            double fromX = green.X + (dx * share), fromY = green.Y + (dy * share);
-            double toX = fromX + (dx / length * width), toY = fromY + (dy / length * width);
-            var box = new Box(Math.Min(fromX, toX), Math.Min(fromY, toY) - 9, Math.Max(fromX, toX) + 4, Math.Max(fromY, toY));
-            if (labels.Taken.Any(box.Overlaps))
-                continue;
-            labels.KeepOff(box);
-            double turn = Math.Atan2(dy, dx) * 180 / Math.PI;
-            var at = new Spot(fromX + (dy / length * 3), fromY - (dx / length * 3));
-            return [new Words(name, at, TextAnchor.Start, 8.5, TextWeight.Regular, palette.Ink, turn, palette.Ground)];
-        }
-
-        return labels.Place(name, green, 8.5, palette.Ink, palette.Ground);
+        var triangles = standards.Select(s => new[] { At(plot, diagram, s.Red), At(plot, diagram, s.Green), At(plot, diagram, s.Blue) }).ToList();
+        foreach (var corners in triangles)
+            plot.Inside(new Shape(corners, Closed: true, null, 1, new Stroke(palette.Ink, 0.7)));
+        if (appraisal.Panel is { } panel)
+            triangles.Add([At(plot, diagram, panel.Red), At(plot, diagram, panel.Green), At(plot, diagram, panel.Blue)]);
+        for (int i = 0; i < standards.Count; i++)
+            plot.Over(EdgeLabel.Place(plot.Labels, standards[i].Name, i, triangles, palette));
     }
 
     private static void Whites(Plot plot, FilmCase filmCase, FilmAppraisal appraisal, ChromaticityDiagram diagram, Palette palette, bool labelled)

@@ -8,7 +8,7 @@ namespace FilmReports.Charts;
 internal static class ChromaticityGround
 {
     private const double Saturation = 0.25;
-    private const int Cells = 52;
+    private const int Cells = 60;
 
     // How far beyond sRGB, in units of its most negative channel, the tint takes to fade.
     private const double FadeChannel = 0.9;
@@ -40,9 +40,9 @@ internal static class ChromaticityGround
 
     private static string? Tint(Chromaticity colour, string ground)
     {
-        if (!(colour.Y > 0.005) || colour.X < 0 || colour.X + colour.Y > 1)
+        if (!(colour.Y > 0.005) || colour.X < -0.02 || colour.X + colour.Y > 1.03)
             return null;
-        double bigX = colour.X / colour.Y, bigZ = (1 - colour.X - colour.Y) / colour.Y;
+        double bigX = colour.X / colour.Y, bigZ = Math.Max(0, 1 - colour.X - colour.Y) / colour.Y;
         // Linear sRGB from XYZ: IEC 61966-2-1.
         double[] rgb =
         [

@@ -10,7 +10,7 @@ internal static class FatesChart
     /// <summary>Losses below this share are drawn together.</summary>
     internal const double PooledShare = 0.005;
 
-    private const double FullWidth = 190, Top = 60, Left = 40, Right = 470;
+    private const double FullWidth = 190, FirstTop = 60, Gap = 14, MinPitch = 26, Left = 40, Right = 470;
 
     /// <summary>A stream of the picture.</summary>
     /// <param name="Name">What becomes of the photons.</param>
@@ -23,19 +23,22 @@ internal static class FatesChart
     public static Drawing Of(FilmCase filmCase, FilmAppraisal appraisal, Palette palette)
     {
         var streams = Streams(filmCase, appraisal, palette);
+        Stream[] outputs = [.. streams.Where(s => s.LeavesAbove)], losses = [.. streams.Where(s => !s.LeavesAbove)];
+        double total = streams.Sum(s => s.Share);
+        double Width(Stream stream) => stream.Share / total * FullWidth;
+        // Outputs fan upward from the lowest, which stays level, so that the losses below have the room to themselves.
+        double lift = outputs.Take(outputs.Length - 1).Sum(s => Math.Max(Width(s), MinPitch) - Width(s) + Gap);
+        double top = FirstTop + lift, outWidth = outputs.Sum(Width);
         var marks = new List<Mark>
         {
             new Words("Where each source photon goes", new(Left, 26), TextAnchor.Start, 13, TextWeight.SemiBold, palette.Ink),
             new Words(string.Create(CultureInfo.InvariantCulture, $"sum of all shares {appraisal.Output.Budget.Sum:0.000000}"), new(600, 26), TextAnchor.End, 9.5, TextWeight.Regular, palette.Faint),
-            new Words("1 source photon", new(Left, Top - 10), TextAnchor.Start, 10, TextWeight.Regular, palette.Ink),
+            new Words("1 source photon", new(Left, top + FullWidth + 16), TextAnchor.Start, 10, TextWeight.Regular, palette.Ink),
         };
-        double total = streams.Sum(s => s.Share), y = Top;
-        Stream[] outputs = [.. streams.Where(s => s.LeavesAbove)], losses = [.. streams.Where(s => !s.LeavesAbove)];
-        double outWidth = outputs.Sum(s => s.Share) * FullWidth / total;
-        double gap = 14, outY = Top;
+        double y = top, outY = FirstTop;
         foreach (var stream in outputs)
         {
-            double width = stream.Share / total * FullWidth;
+            double width = Width(stream);
             marks.Add(Ribbon(y, outY, width, stream.Colour));
             var label = new Spot(Right + 26, outY + Math.Max(width / 2, 4));
             if (stream.Mark is { } mark)
@@ -43,18 +46,18 @@ internal static class FatesChart
             marks.Add(new Words(stream.Name, new(label.X, label.Y - 1), TextAnchor.Start, 10, TextWeight.SemiBold, palette.Ink));
             marks.Add(new Words(Percent(stream.Share), new(label.X, label.Y + 11), TextAnchor.Start, 9.5, TextWeight.Regular, palette.Ink));
             y += width;
-            outY += Math.Max(width, 14) + gap;
+            outY += Math.Max(width, MinPitch) + Gap;
         }
 
         // Losses bend downward, the lowest first so that no two cross.
-        double bottom = Math.Max(Top + FullWidth, outY - gap) + 46;
-        double x = Left + 70;
-        double lossTop = Top + outWidth;
+        double bottom = Math.Max(top + FullWidth, outY - Gap) + 46;
+        double x = Left + 104;
+        double lossTop = top + outWidth;
         double lossHeight = FullWidth - outWidth;
         double slot = Math.Max(62, (Right - x) / Math.Max(1, losses.Length));
         for (int i = 0; i < losses.Length; i++)
         {
-            double width = losses[i].Share / total * FullWidth;
+            double width = Width(losses[i]);
             double from = lossTop + lossHeight - width;
             marks.Add(Downward(from, x, width, bottom, losses[i].Colour));
             double labelX = x + (width / 2);
@@ -66,7 +69,7 @@ internal static class FatesChart
             x += Math.Max(slot, width + 20);
         }
 
-        marks.Insert(3, new Shape([new(Left - 14, Top), new(Left, Top), new(Left, Top + FullWidth), new(Left - 14, Top + FullWidth), new(Left - 6, Top + (FullWidth / 2))], Closed: true, palette.Source, 0.9, null));
+        marks.Insert(3, new Shape([new(Left - 14, top), new(Left, top), new(Left, top + FullWidth), new(Left - 14, top + FullWidth), new(Left - 6, top + (FullWidth / 2))], Closed: true, palette.Source, 0.9, null));
         return new Drawing(
             "photon-fates",
             "Where each source photon goes",

@@ -39,7 +39,7 @@ internal static class LotChart
         double step = Plot.NiceStep(Math.Max(highest, 1e-6), 4);
         double limit = Math.Ceiling(Math.Max(highest, 1e-6) * 1.15 / step) * step;
         var plot = new Plot(palette, new Box(66, top, 586, top + RowHeight), (FromNm, ToNm), (0, limit), new Box(66, top - 16, 632, top + RowHeight));
-        plot.Axes(20, "wavelength / nm", step, "absorbed in one pass", "0", step < 0.01 ? "0.000" : "0.00");
+        plot.Axes(20, "wavelength / nm", step, "absorbed in one pass", "0", step < 0.01 ? "0.000" : step < 0.1 ? "0.00" : "0.0");
         var (colour, dash, mark) = palette.OfEmitter(SpectrumChart.PeakNm(lot.Emission));
         Area(plot, film.Backlight.Photons.Samples, film.Backlight.Photons.Peak, limit, palette.Source);
         Area(plot, lot.Emission.Samples, lot.Emission.Peak, limit, colour);

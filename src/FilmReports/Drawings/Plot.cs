@@ -97,7 +97,7 @@ internal sealed class Plot
     {
         double slack = step * 1e-9;
         for (double i = Math.Ceiling((range.From - slack) / step); i * step <= range.To + slack; i++)
-            yield return i * step;
+            yield return i == 0 ? 0 : i * step; // Not the negative zero that the ceiling of a small negative number is.
     }
 
     private static string Number(double value, string format) =>
