@@ -18,7 +18,7 @@ internal sealed class TracedOutput(Film film, Tally tally, long photonsAsked, ul
             Unconverted = shares[0].Light,
             ConvertedByLot = [.. shares.Skip(1).Select(pair => pair.Light)],
             Budget = Budget(),
-            Warnings = [.. Warnings()],
+            Warnings = [.. Warnings(tally, photonsAsked)],
         };
         return output with
         {
@@ -108,7 +108,8 @@ internal sealed class TracedOutput(Film film, Tally tally, long photonsAsked, ul
             Spectrum.FromSamples<PhotonPerNm>(error, $"{name}, standard error of the traced light"));
     }
 
-    private IEnumerable<string> Warnings()
+    /// <summary>What makes a traced result doubtful.</summary>
+    public static IEnumerable<string> Warnings(Tally tally, long photonsAsked)
     {
         if (tally.Photons < photonsAsked)
         {
@@ -117,7 +118,7 @@ internal sealed class TracedOutput(Film film, Tally tally, long photonsAsked, ul
                 $"Interrupted: {tally.Photons:N0} of {photonsAsked:N0} photons were traced. Standard errors are those of the traced ones.");
         }
 
-        double guided = tally.LostAtEdges / _photons;
+        double guided = (double)tally.LostAtEdges / tally.Photons;
         if (guided > GuidedWorthAWarningShare)
         {
             yield return string.Create(
