@@ -33,6 +33,9 @@ public sealed record FilmOutput
     /// </summary>
     public Spectrum<PhotonPerNm>? NormalRadiance { get; init; }
 
+    /// <summary>Light against the exit angle, where it was asked for.</summary>
+    public AngularOutput? Angles { get; init; }
+
     /// <summary>Where every photon went.</summary>
     public required PhotonBudget Budget { get; init; }
 
