@@ -68,11 +68,12 @@ public sealed class InspectCommandTests
     public void AngleTable_HasItsMeanOverTheHemisphere()
     {
         using var workshop = new Workshop();
-        workshop.Write("angles.csv", "angle_deg,reflectance\n0,0.6\n30,0.6\n60,0.6\n90,0.6\n");
+        // 1 − θ/90° weighted by sin θ cos θ has the mean 1 − (2/π) ∫ θ sin 2θ dθ = 1/2 exactly.
+        workshop.Write("angles.csv", "angle_deg,reflectance\n0,1\n30,0.6666666667\n60,0.3333333333\n90,0\n");
         var document = JsonNode.Parse(workshop.Run("inspect", "angles.csv", "--json").AssertDone().Output)!;
-        Assert.Equal(0.6, (double)document["columns"]![0]!["hemisphere_mean"]!, 1e-9);
+        Assert.Equal(0.5, (double)document["columns"]![0]!["hemisphere_mean"]!, 1e-6);
         Assert.Equal(30, (double)document["step_deg"]!);
-        Assert.Contains("0.6", workshop.Run("inspect", "angles.csv").AssertDone().AssertPlain().Output, StringComparison.Ordinal);
+        Assert.Contains("cosine: 0.5", workshop.Run("inspect", "angles.csv").AssertDone().AssertPlain().Output, StringComparison.Ordinal);
     }
 
     [Fact]
