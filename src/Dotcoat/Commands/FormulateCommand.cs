@@ -24,6 +24,8 @@ internal static class FormulateCommand
 
     private static int Run(CommandContext context, string file, FilmRequest request, string? save)
     {
+        if (request.Model is PhotonTracingModel)
+            throw new InputException(new InputFault("--model", null, null, $"{request.Model.Name} has noise, which a search for loadings cannot follow; formulate with another model and check the film with simulate --model {request.Model.Name}."));
         string path = context.PathOf(file);
         var saved = save is null ? null : SavedFilm.Plan(path, context.PathOf(save), request.Overrides);
         var filmCase = FilmFile.Load(path, request.Overrides);

@@ -44,6 +44,13 @@ public sealed class FormulateCommandTests
     }
 
     [Fact]
+    public void WithATracedModel_IsRefusedWithAWayOut()
+    {
+        using var workshop = Workshop.WithDemo();
+        Assert.Contains("simulate --model monte-carlo", workshop.Run("formulate", Monitor, "--model", "monte-carlo").AssertRefused().Error, StringComparison.Ordinal);
+    }
+
+    [Fact]
     public void WithoutTarget_IsRefused()
     {
         using var workshop = Workshop.WithDemo();
