@@ -90,6 +90,7 @@ internal static class CommandLine
             SimulateCommand.Create(context),
             FormulateCommand.Create(context),
             InspectCommand.Create(context),
+            ReportCommand.Create(context),
             StartCommand.Create(context),
         };
         foreach (var option in root.Options)

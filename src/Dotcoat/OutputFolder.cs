@@ -106,16 +106,19 @@ internal static class OutputFolder
     {
         if (File.Exists(target))
             throw new InputException(new InputFault(folder, null, null, "is a file; a folder is needed to write into."));
-        var touched = files.Select(f => f.Name).Union(earlier.Keys, StringComparer.Ordinal).Append(ListName);
         var faults = new List<InputFault>();
-        foreach (string name in touched)
+        foreach (string name in files.Select(f => f.Name).Union(earlier.Keys, StringComparer.Ordinal))
         {
             string path = Path.Combine(target, name);
-            if (name == ListName || !File.Exists(path))
+            if (!File.Exists(path))
+                continue;
+            byte[] standing = File.ReadAllBytes(path);
+            // The same bytes again lose nothing, whoever wrote them.
+            if (files.FirstOrDefault(f => f.Name == name) is { } file && standing.AsSpan().SequenceEqual(file.Bytes))
                 continue;
             if (!earlier.TryGetValue(name, out string? hash))
                 faults.Add(new(Path.Combine(folder, name), null, null, "was not written by dotcoat and is not replaced; move it or choose another folder with --out."));
-            else if (hash != Hash(File.ReadAllBytes(path)))
+            else if (hash != Hash(standing))
                 faults.Add(new(Path.Combine(folder, name), null, null, "was changed since dotcoat wrote it and is not replaced; move it or choose another folder with --out."));
         }
 

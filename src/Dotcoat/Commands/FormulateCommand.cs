@@ -40,7 +40,7 @@ internal static class FormulateCommand
             ReportJson.Formulate(formulation),
             () => FilmText.Formulated(formulation),
             request.Delivery,
-            () => []);
+            () => Charts.Of(formulation.FilmCase, formulation.Appraisal));
         return formulation.Reached ? ExitStatus.Done : ExitStatus.TargetNotMet;
     }
 }

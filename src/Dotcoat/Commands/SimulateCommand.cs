@@ -29,7 +29,7 @@ internal static class SimulateCommand
             ReportJson.Simulate(filmCase, appraisal),
             () => FilmText.Simulated(filmCase, appraisal),
             request.Delivery,
-            () => []);
+            () => Charts.Of(filmCase, appraisal));
         return ExitStatus.Done;
     }
 }

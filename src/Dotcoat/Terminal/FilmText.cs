@@ -1,5 +1,6 @@
 using FilmDesign;
 using FilmOptics;
+using FilmReports.Safety;
 
 namespace Dotcoat.Terminal;
 
@@ -48,7 +49,7 @@ internal static class FilmText
                 [.. gamut.Select(g => new[] { g.Name, Figure.Fixed(g.CoverageXy, 4), Figure.Fixed(g.CoverageUv, 4), Figure.Fixed(g.AreaRatioXy, 4), Figure.Fixed(g.AreaRatioUv, 4) })]);
         }
 
-        return text.Sentences("Warnings", appraisal.Warnings).ToString();
+        return text.Sentences("Warnings", appraisal.Warnings).Sentences("Cautions", Cautions.For(filmCase, appraisal)).ToString();
     }
 
     private static IEnumerable<string[]> Fates(FilmCase filmCase, PhotonBudget budget)

@@ -17,6 +17,7 @@ public sealed class CommandLineTests
     [InlineData("simulate")]
     [InlineData("formulate")]
     [InlineData("inspect")]
+    [InlineData("report")]
     [InlineData("start")]
     public void Help_OfEveryCommand_ListsTheExitStatuses(string command)
     {
@@ -54,6 +55,7 @@ public sealed class CommandLineTests
     [Theory]
     [InlineData("simulate", "spectra/demo/desk-monitor.film.yaml", "--out", "result")]
     [InlineData("formulate", "spectra/demo/desk-monitor.film.yaml", "--out", "result", "--save", "spectra/demo/new.film.yaml")]
+    [InlineData("report", "spectra/demo/desk-monitor.film.yaml", "--out", "result")]
     [InlineData("inspect", "spectra/demo/led-blue-447.csv", "--out", "result")]
     [InlineData("start", "result")]
     public void Interrupted_LeavesNothing(params string[] arguments)
@@ -85,6 +87,7 @@ public sealed class CommandLineTests
     [Theory]
     [InlineData("simulate")]
     [InlineData("formulate")]
+    [InlineData("report")]
     [InlineData("inspect")]
     public void MissingFile_IsOneLine(string command)
     {

@@ -41,6 +41,15 @@ public sealed class OutputFolderTests : IDisposable
     }
 
     [Fact]
+    public void Write_OverTheSameBytes_IsDone()
+    {
+        Directory.CreateDirectory(Folder);
+        _workshop.Write("a/b/result/one.txt", "1");
+        Write(("one.txt", "1"), ("two.txt", "2"));
+        Assert.Equal("2", _workshop.Read("a/b/result/two.txt"));
+    }
+
+    [Fact]
     public void Write_OverAFileChangedSince_IsRefused()
     {
         Write(("one.txt", "1"));

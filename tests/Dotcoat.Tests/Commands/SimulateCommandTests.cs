@@ -14,7 +14,7 @@ public sealed class SimulateCommandTests
         using var workshop = Workshop.WithDemo();
         string text = workshop.Run("simulate", $"spectra/demo/{name}.film.yaml").AssertDone().AssertPlain().Output;
         Assert.StartsWith("Panel white x 0.31", text, StringComparison.Ordinal);
-        int[] order = [.. new[] { "panel white", "where each source photon goes", "efficiency", "light above", "panel against" }
+        int[] order = [.. new[] { "panel white", "where each source photon goes", "efficiency", "light above", "panel against", "Cautions" }
             .Select(heading => text.IndexOf(heading, 20, StringComparison.Ordinal))];
         Assert.DoesNotContain(-1, order);
         Assert.Equal(order.Order(), order);
@@ -82,6 +82,8 @@ public sealed class SimulateCommandTests
         string[] files = [.. Directory.EnumerateFiles(workshop.PathOf("result")).Select(f => Path.GetFileName(f))];
         foreach (string table in (string[])["spectrum.csv", "photons.csv", "gamut.csv", "bands.csv", "layers.csv", "efficiency.csv", "film.csv", "panel.csv"])
             Assert.Contains(table, files, StringComparer.Ordinal);
+        Assert.Contains(files, f => f.EndsWith(".svg", StringComparison.Ordinal));
+        Assert.Contains(files, f => f.EndsWith(".png", StringComparison.Ordinal));
         Assert.Equal(472, workshop.Read("result/spectrum.csv").TrimEnd().Split('\n').Length);
         workshop.Run("simulate", Monitor, "--json", "--out", "result").AssertDone();
     }

@@ -63,11 +63,11 @@ internal sealed record Outcome(int Status, string Output, string Error)
         return this;
     }
 
-    /// <summary>Success without a word on standard error.</summary>
+    /// <summary>Success without a word on standard error but for progress, which a busy machine brings.</summary>
     public Outcome AssertDone()
     {
         Assert.True(Status == 0, $"status {Status}: {Error}");
-        Assert.Equal("", Error);
+        Assert.All(ErrorLines, line => Assert.EndsWith(" …", line, StringComparison.Ordinal));
         return this;
     }
 
