@@ -54,19 +54,22 @@ internal static class FatesChart
         double x = Left + 104;
         double lossTop = top + outWidth;
         double lossHeight = FullWidth - outWidth;
-        double slot = Math.Max(62, (Right - x) / Math.Max(1, losses.Length));
+        double labelEnd = 0;
         for (int i = 0; i < losses.Length; i++)
         {
             double width = Width(losses[i]);
+            string[] lines = losses[i].Name.Split('|');
+            double labelWidth = lines.Max(line => InterFont.WidthOf(line, 9, TextWeight.Regular));
+            x = Math.Max(x, labelEnd + 10 + ((labelWidth - width) / 2));
             double from = lossTop + lossHeight - width;
             marks.Add(Downward(from, x, width, bottom, losses[i].Colour));
             double labelX = x + (width / 2);
-            string[] lines = losses[i].Name.Split('|');
             for (int line = 0; line < lines.Length; line++)
                 marks.Add(new Words(lines[line], new(labelX, bottom + 16 + (line * 11)), TextAnchor.Middle, 9, TextWeight.Regular, palette.Ink));
             marks.Add(new Words(Percent(losses[i].Share), new(labelX, bottom + 16 + (lines.Length * 11)), TextAnchor.Middle, 9.5, TextWeight.SemiBold, palette.Ink));
             lossHeight -= width;
-            x += Math.Max(slot, width + 20);
+            labelEnd = labelX + (labelWidth / 2);
+            x += width + 22;
         }
 
         marks.Insert(3, new Shape([new(Left - 14, top), new(Left, top), new(Left, top + FullWidth), new(Left - 14, top + FullWidth), new(Left - 6, top + (FullWidth / 2))], Closed: true, palette.Source, 0.9, null));
@@ -74,7 +77,7 @@ internal static class FatesChart
             "photon-fates",
             "Where each source photon goes",
             string.Join(' ', streams.Select(s => $"{s.Name.Replace('|', ' ')}: {Percent(s.Share)}.")),
-            Math.Max(640, x + 10),
+            Math.Max(640, labelEnd + 20),
             bottom + 62,
             marks);
     }
