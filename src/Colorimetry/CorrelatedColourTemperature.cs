@@ -15,7 +15,7 @@ public static class CorrelatedColourTemperature
 
     // A black body of exactly 1000 or 25 000 K must come back as such through rounding.
     private const double LimitSlackShare = 1e-6;
-    private const double FirstMired = 39, LastMired = 1002, StepMired = 3;
+    private const double FirstMired = 33, LastMired = 1008, StepMired = 3;
 
     private static readonly Lazy<(double Mired, double U, double V)[]> Coarse = new(() =>
     [
