@@ -5,6 +5,7 @@ internal sealed class LoadingBox
 {
     // A loading of this share of optical depth 1 changes nothing that can be seen; logarithms need a floor.
     private const double FloorDepth = 1e-7;
+    private const double UnboundedDepth = 1e3;
     private const double StartDepth = 0.3;
     private const int CoarseSteps = 7;
     private const double CoarseFirstDepth = 3e-3, CoarseLastDepth = 30;
@@ -40,6 +41,13 @@ internal sealed class LoadingBox
         }
 
         return new(min, max, floor, unit) { Start = (start[0], start[1]) };
+    }
+
+    /// <summary>No bounds but none: up to a depth at which no light is left.</summary>
+    public static LoadingBox Unbounded(LoadingProblem problem)
+    {
+        double[] unit = [.. Enumerable.Range(0, 2).Select(i => problem.UnitDepthMgPerMl(i) ?? problem.Target.Free[i].MaxMgPerMl)];
+        return new([0, 0], [.. unit.Select(u => u * UnboundedDepth)], [.. unit.Select(u => u * FloorDepth)], unit);
     }
 
     /// <summary>The loading with its bounds kept, mg/mL.</summary>

@@ -5,95 +5,102 @@ using FilmOptics;
 namespace FilmDesign;
 
 /// <summary>Says why a white cannot be reached: what was found, what it means, what to do.</summary>
+/// <remarks>
+/// Reasons are found by asking what would help: without the target's bounds, without bypass, with another emission peak. The first
+/// that does is the reason, so that no reason is given that would not be a way out.
+/// </remarks>
 internal static class LoadingLimit
 {
-    private const double AtBoundShare = 1e-3;
+    private const string Advice =
+        " Raise the yields, reduce the overlap of one lot's absorption with the other's emission, or take lots that absorb all of the source's band.";
 
-    public static string Explain(LoadingProblem problem, LoadingBox box, LoadingPoint best, FilmOutput output)
+    public static string Explain(LoadingProblem problem, LoadingPoint best, FilmOutput output)
     {
-        var nearest = new WhiteMeter(problem.FilmCase, problem.Target.Place).Read(output).Chromaticity;
-        return $"White cannot reach {Text(problem.Wanted)}: {Reason(problem, box, best)} Nearest white {Text(nearest)}.";
+        var nearest = problem.ChromaticityOf(output);
+        return $"White cannot reach {Text(problem.Wanted)}: {Reason(problem, best)} Nearest white {Text(nearest)}.";
     }
 
-    private static string Reason(LoadingProblem problem, LoadingBox box, LoadingPoint best)
+    /// <summary>x, y with four decimals.</summary>
+    public static string Text(Chromaticity c) => string.Create(CultureInfo.InvariantCulture, $"{c.X:0.0000}, {c.Y:0.0000}");
+
+    private static string Reason(LoadingProblem problem, LoadingPoint best)
     {
+        if (DeadLot(problem) is { } dead)
+            return dead;
+
+        var unbounded = problem.WithoutBounds();
+        var box = LoadingBox.Unbounded(unbounded);
+        var free = LoadingSolver.Best(unbounded, box, best);
+        if (IsReached(problem, free))
+            return Bound(problem, free);
+
+        var sealedFilm = unbounded.WithoutBypass();
+        if (problem.FilmCase.Film.Cavity.BypassShare > 0 && LoadingSolver.Best(sealedFilm, box, best) is var tight && IsReached(problem, tight))
+            return Bypass(problem, sealedFilm, tight);
+
+        var alone = unbounded.WithoutFixedLots(out var fixedLots);
+        if (fixedLots.Count > 0 && IsReached(problem, LoadingSolver.Best(alone, box, best)))
+            return Fixed(fixedLots);
+
+        var output = unbounded.OutputAt(free.FirstMgPerMl, free.SecondMgPerMl);
+        // Where a lot is at zero its light has no colour: a trace of it shows the colour it would have.
+        var probe = unbounded.OutputAt(Math.Max(free.FirstMgPerMl, box.Unit[0] * 1e-3), Math.Max(free.SecondMgPerMl, box.Unit[1] * 1e-3));
+        if (MixTriangle.Of(problem, probe) is not { } triangle)
+            return "light of one of the lots never comes out above. Raise its yield or the opening above.";
+        return triangle.OutsideReason() ?? triangle.ShortLight(output) + Advice;
+    }
+
+    private static bool IsReached(LoadingProblem problem, LoadingPoint point) => point.DistanceXy <= problem.Target.ToleranceXy;
+
+    private static string? DeadLot(LoadingProblem problem)
+    {
+        // At its bounds and with the other lot shining: what is not excited then never is.
+        var box = LoadingBox.Of(problem);
+        var probe = problem.OutputAt(Math.Min(box.Unit[0], box.Max[0]), Math.Min(box.Unit[1], box.Max[1]));
         for (int i = 0; i < 2; i++)
         {
-            if (problem.UnitDepthMgPerMl(i) is null)
-                return $"{problem.Lot(i).Name} absorbs none of the source light, so it emits next to nothing. Choose a lot that absorbs at the source's peak.";
-            if (problem.Lot(i).FilmYieldShare == 0)
-                return $"{problem.Lot(i).Name} has a quantum yield of 0 in the film, so it emits nothing. Check quantum_yield and film_yield_factor.";
-        }
-
-        // A white within the box of loadings is a mixture of three lights. Outside their triangle no loading helps.
-        var probe = problem.OutputAt(Math.Max(best.FirstMgPerMl, box.Unit[0] * 0.1), Math.Max(best.SecondMgPerMl, box.Unit[1] * 0.1));
-        if (problem.Corners(probe) is [{ } source, { } first, { } second] && OutsideReason(problem, source, first, second) is { } outside)
-            return outside;
-        if (BoundReason(problem, box, best) is { } bound)
-            return bound;
-        return SourceLeft(problem);
-    }
-
-    private static string? OutsideReason(LoadingProblem problem, Chromaticity source, Chromaticity first, Chromaticity second)
-    {
-        // Barycentric shares of the target in the triangle source, first, second: a negative one names the light there is too much of.
-        double area = Cross(source, first, second);
-        double ofSource = Cross(problem.Wanted, first, second) / area;
-        double ofFirst = Cross(source, problem.Wanted, second) / area;
-        double ofSecond = Cross(source, first, problem.Wanted) / area;
-        string place = problem.Target.Place == TargetPlace.Panel ? "behind the filters" : "above the film";
-        string a = problem.Lot(0).Name, b = problem.Lot(1).Name;
-        double peakNm = EmissionBands.Of("source", problem.FilmCase.Film.Backlight.Photons).PeakNm ?? 0;
-        if (ofSource < 0)
-        {
-            return $"{place}, {a} ({Text(first)}) and {b} ({Text(second)}) together are already bluer than the target, with no source light at all. "
-                + "Choose lots with less blue-green in their emission, or filters that hold it back.";
-        }
-
-        if (ofFirst < 0 || ofSecond < 0)
-        {
-            var (missing, other, otherAt) = ofFirst < 0 ? (a, b, second) : (b, a, first);
-            return string.Create(
-                CultureInfo.InvariantCulture,
-                $"{place}, the source with its peak at {peakNm:0.0} nm ({Text(source)}) and {other} ({Text(otherAt)}) lie so that even without any {missing} the white passes the target on the far side. ")
-                + (peakNm > 475
-                    ? "The source's peak is long: a shorter one (near 450 nm) opens the way."
-                    : $"Choose another lot than {other}, with a peak nearer the colour that is short, or a shorter source.");
+            var lot = problem.Lot(i);
+            if (probe.Budget.Excitations[problem.FilmCase.Film.IndexOf(lot)] < 1e-12)
+                return $"{lot.Name} absorbs none of this light, so its loading changes nothing. Choose a lot whose absorbance covers {Nm(problem.SourcePeakNm)}.";
+            if (lot.FilmYieldShare == 0)
+                return $"{lot.Name} has a quantum yield of 0 in the film, so it emits nothing. Check quantum_yield and film_yield_factor.";
         }
 
         return null;
     }
 
-    private static string? BoundReason(LoadingProblem problem, LoadingBox box, LoadingPoint best)
+    private static string Bound(LoadingProblem problem, LoadingPoint free)
     {
-        var reasons = new List<string>();
-        double[] at = [best.FirstMgPerMl, best.SecondMgPerMl];
-        for (int i = 0; i < 2; i++)
+        if (!problem.HasRoomFor(free.FirstMgPerMl, free.SecondMgPerMl))
         {
-            string name = problem.Lot(i).Name;
-            if (at[i] >= box.Max[i] * (1 - AtBoundShare))
-                reasons.Add(string.Create(CultureInfo.InvariantCulture, $"{name} is at its upper bound of {box.Max[i]:0.###} mg/mL; raise it, make the layer thicker, or take a lot that absorbs more."));
-            else if (box.Min[i] > 0 && at[i] <= box.Min[i] * (1 + AtBoundShare))
-                reasons.Add(string.Create(CultureInfo.InvariantCulture, $"{name} is at its lower bound of {box.Min[i]:0.###} mg/mL; lower it, or make the layer thinner."));
+            return $"it needs {Mg(free.FirstMgPerMl)} of {problem.Lot(0).Name} and {Mg(free.SecondMgPerMl)} of {problem.Lot(1).Name}, which is more than the layer has room for. "
+                + "Coat thicker, or take lots that absorb more.";
         }
 
-        return reasons.Count > 0 ? string.Join(" ", reasons) : null;
+        double[] needed = [free.FirstMgPerMl, free.SecondMgPerMl];
+        var bounds = problem.Target.Free;
+        string[] above = [.. Enumerable.Range(0, 2).Where(i => needed[i] > bounds[i].MaxMgPerMl)
+            .Select(i => $"{Mg(needed[i])} of {bounds[i].LotName}, above the bound of {Mg(bounds[i].MaxMgPerMl)}")];
+        string[] below = [.. Enumerable.Range(0, 2).Where(i => needed[i] < bounds[i].MinMgPerMl)
+            .Select(i => $"{Mg(needed[i])} of {bounds[i].LotName}, below the bound of {Mg(bounds[i].MinMgPerMl)}")];
+        return $"it needs {string.Join(", and ", above.Concat(below))}."
+            + (above.Length > 0 ? " Raise the upper bound, coat thicker, or take a lot that absorbs more." : "")
+            + (below.Length > 0 ? " Lower the lower bound, or coat thinner." : "");
     }
 
-    private static string SourceLeft(LoadingProblem problem)
+    private static string Fixed(IReadOnlyList<string> lots) =>
+        $"the target is in reach without {string.Join(" and ", lots)}, whose loading is held fixed: its light is there whatever the free lots do. Lower that loading, or free it.";
+
+    private static string Bypass(LoadingProblem problem, LoadingProblem sealedFilm, LoadingPoint tight)
     {
-        double bypass = problem.FilmCase.Film.Cavity.BypassShare;
-        string others = problem.FilmCase.Film.Layers.SelectMany(l => l.Dots).Any(d => problem.Target.Free.All(f => f.LotName != d.Lot.Name))
-            ? " The lots that are held fixed may already emit too much; free one of them."
-            : "";
-        return (bypass > 0
-            ? string.Create(CultureInfo.InvariantCulture, $"{bypass:P1} of the source misses the film and what is converted cannot make up for that blue, at any loading. Close the gaps (cavity.bypass_share), or raise the lots' yield.")
-            : "the mixture of source and emitted light that the target needs is not reached at any loading: dots re-absorb each other's light and lose it as fast as more of them add it. Raise the yields, reduce the overlap of red absorption with green emission, or return more light from above.")
-            + others;
+        var budget = sealedFilm.OutputAt(tight.FirstMgPerMl, tight.SecondMgPerMl).Budget;
+        var cavity = problem.FilmCase.Film.Cavity;
+        return string.Create(
+            CultureInfo.InvariantCulture,
+            $"{100 * cavity.BypassShare:0.#} % of the source light misses the film, and no loading takes that blue away. A film without gaps would be on target with {100 * budget.Unconverted:0.#} % of the source photons left above. Close the gaps (cavity.bypass_share) or return more light from above.");
     }
 
-    private static double Cross(Chromaticity a, Chromaticity b, Chromaticity c) =>
-        ((b.X - a.X) * (c.Y - a.Y)) - ((c.X - a.X) * (b.Y - a.Y));
+    private static string Mg(double mgPerMl) => mgPerMl.ToString(mgPerMl >= 100 ? "0" : "0.###", CultureInfo.InvariantCulture) + " mg/mL";
 
-    private static string Text(Chromaticity c) => string.Create(CultureInfo.InvariantCulture, $"{c.X:0.0000}, {c.Y:0.0000}");
+    private static string Nm(double nm) => nm.ToString("0", CultureInfo.InvariantCulture) + " nm";
 }

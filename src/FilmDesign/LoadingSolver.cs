@@ -11,9 +11,6 @@ namespace FilmDesign;
 /// </remarks>
 public static class LoadingSolver
 {
-    // White this near in xy is solved: far below any tolerance that a line can hold.
-    private const double SolvedXy = 1e-9;
-
     /// <summary>Solves.</summary>
     /// <param name="filmCase">The film file; its target names two free lots.</param>
     /// <param name="model">Any model.</param>
@@ -26,31 +23,34 @@ public static class LoadingSolver
         ArgumentNullException.ThrowIfNull(model);
         var problem = new LoadingProblem(filmCase, model, cancellationToken);
         var box = LoadingBox.Of(problem);
-        var best = WhiteNewton.Run(problem, box, box.Start, SolvedXy);
-        if (best.DistanceXy > SolvedXy)
+        var best = Best(problem, box, new(box.Start.First, box.Start.Second, double.MaxValue));
+        return Outcome(problem, best);
+    }
+
+    /// <summary>The point on target that a search from a start finds, or the nearest there is within a box.</summary>
+    internal static LoadingPoint Best(LoadingProblem problem, LoadingBox box, LoadingPoint start)
+    {
+        var best = WhiteNewton.Run(problem, box, (box.Clamp(0, start.FirstMgPerMl), box.Clamp(1, start.SecondMgPerMl)));
+        if (best.DistanceXy > problem.EnoughXy)
         {
-            foreach (var start in box.CoarseBest(problem, count: 3))
+            foreach (var coarse in box.CoarseBest(problem, count: 3))
             {
-                var tried = WhiteNewton.Run(problem, box, start, SolvedXy);
+                var tried = WhiteNewton.Run(problem, box, coarse);
                 if (tried.DistanceXy < best.DistanceXy)
                     best = tried;
-                if (best.DistanceXy <= SolvedXy)
+                if (best.DistanceXy <= problem.EnoughXy)
                     break;
             }
         }
 
-        if (best.DistanceXy > problem.Target.ToleranceXy)
-            best = NearestWhite.Search(problem, box, best);
-        return Outcome(problem, box, best, model, cancellationToken);
+        return best.DistanceXy > problem.EnoughXy ? NearestWhite.Search(problem, box, best) : best;
     }
 
-    private static Formulation Outcome(
-        LoadingProblem problem, LoadingBox box, LoadingPoint best, IFilmModel model, CancellationToken cancellationToken)
+    private static Formulation Outcome(LoadingProblem problem, LoadingPoint best)
     {
         var film = problem.FilmAt(best.FirstMgPerMl, best.SecondMgPerMl);
         var output = problem.OutputAt(best.FirstMgPerMl, best.SecondMgPerMl);
         var solved = problem.FilmCase with { Film = film };
-        cancellationToken.ThrowIfCancellationRequested();
         bool reached = best.DistanceXy <= problem.Target.ToleranceXy;
         return new Formulation
         {
@@ -64,7 +64,7 @@ public static class LoadingSolver
             ],
             Reached = reached,
             WhiteErrorXy = best.DistanceXy,
-            Limit = reached ? null : LoadingLimit.Explain(problem, box, best, output),
+            Limit = reached ? null : LoadingLimit.Explain(problem, best, output),
             Solves = problem.Solves,
         };
     }

@@ -20,21 +20,31 @@ internal static class NearestWhite
 
     private static LoadingPoint Better(LoadingPoint a, LoadingPoint b) => b.DistanceXy < a.DistanceXy ? b : a;
 
-    // A simplex needs no derivatives, which the distance does not have at its bounds.
+    // A simplex needs no derivatives, which the distance does not have at its bounds. Its best point counts, however it stopped.
     private static LoadingPoint Interior(LoadingProblem problem, LoadingBox box, LoadingPoint best)
     {
-        var minimum = NelderMeadSimplex.Minimum(
-            ObjectiveFunction.Value(v => At(v[0], v[1]).DistanceXy),
-            MathNet.Numerics.LinearAlgebra.Vector<double>.Build.Dense(
-                [Math.Log(box.Clamp(0, best.FirstMgPerMl)), Math.Log(box.Clamp(1, best.SecondMgPerMl))]),
-            convergenceTolerance: 1e-9,
-            maximumIterations: 400);
-        return At(minimum.MinimizingPoint[0], minimum.MinimizingPoint[1]);
+        try
+        {
+            NelderMeadSimplex.Minimum(
+                ObjectiveFunction.Value(v => At(v[0], v[1])),
+                MathNet.Numerics.LinearAlgebra.Vector<double>.Build.Dense(
+                    [Math.Log(box.Clamp(0, best.FirstMgPerMl)), Math.Log(box.Clamp(1, best.SecondMgPerMl))]),
+                convergenceTolerance: 1e-10,
+                maximumIterations: 400);
+        }
+        catch (MaximumIterationsException)
+        {
+            // The edges are searched next, and the distance found so far is a true one.
+        }
 
-        LoadingPoint At(double p, double q)
+        return best;
+
+        double At(double p, double q)
         {
             double first = box.Clamp(0, Math.Exp(p)), second = box.Clamp(1, Math.Exp(q));
-            return new(first, second, problem.DistanceAt(first, second));
+            double distance = problem.DistanceAt(first, second);
+            best = Better(best, new(first, second, distance));
+            return distance;
         }
     }
 

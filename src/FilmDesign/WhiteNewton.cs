@@ -6,22 +6,21 @@ namespace FilmDesign;
 internal static class WhiteNewton
 {
     private const int MaxIterations = 40;
-    private const double DerivativeStep = 1e-5;
 
     // A factor of e² a step: far enough to cross decades, near enough not to leave the region where the film still glows.
     private const double MaxLogStep = 2;
 
-    public static LoadingPoint Run(LoadingProblem problem, LoadingBox box, (double First, double Second) start, double solvedXy)
+    public static LoadingPoint Run(LoadingProblem problem, LoadingBox box, (double First, double Second) start)
     {
         double p = Math.Log(start.First), q = Math.Log(start.Second), damping = 1e-8;
         if (problem.WhiteAt(start.First, start.Second) is not { } first)
             return new(start.First, start.Second, 2);
         var (r0, r1) = Residual(first, problem.Wanted);
         double distance = first.Chromaticity.DistanceXyTo(problem.Wanted);
-        for (int iteration = 0; iteration < MaxIterations && distance > solvedXy && damping < 1e8; iteration++)
+        for (int iteration = 0; iteration < MaxIterations && distance > problem.AimXy && damping < 1e8; iteration++)
         {
-            if (Slope(problem, p + Towards(box, 0, p), q, p, q, r0, r1) is not { } a
-                || Slope(problem, p, q + Towards(box, 1, q), p, q, r0, r1) is not { } b)
+            if (Slope(problem, p + Towards(problem, box, 0, p), q, p, q, r0, r1) is not { } a
+                || Slope(problem, p, q + Towards(problem, box, 1, q), p, q, r0, r1) is not { } b)
             {
                 break;
             }
@@ -61,8 +60,8 @@ internal static class WhiteNewton
     }
 
     // Differences go away from a bound, so that they never leave the box.
-    private static double Towards(LoadingBox box, int free, double logLoading) =>
-        Math.Exp(logLoading + DerivativeStep) <= box.Max[free] ? DerivativeStep : -DerivativeStep;
+    private static double Towards(LoadingProblem problem, LoadingBox box, int free, double logLoading) =>
+        Math.Exp(logLoading + problem.DerivativeStep) <= box.Max[free] ? problem.DerivativeStep : -problem.DerivativeStep;
 
     private static (double Ofx, double Ofz)? Slope(LoadingProblem problem, double p, double q, double p0, double q0, double r0, double r1)
     {

@@ -21,12 +21,13 @@ public sealed class BeerLambertModel : IFilmModel
 
     /// <summary>Finds where each source photon goes, in some tens of microseconds.</summary>
     /// <param name="film">The film.</param>
-    /// <param name="cancellationToken">Not needed: a solve is short.</param>
+    /// <param name="cancellationToken">Heeded before the solve, which is short.</param>
     /// <exception cref="InputException">A number is out of its range, or light is caught between perfect mirrors with nothing to end it.</exception>
     /// <exception cref="NumericalFailureException">The budget does not close within 1e-12, or a figure is not a number.</exception>
     public FilmOutput Solve(Film film, CancellationToken cancellationToken = default)
     {
         ArgumentNullException.ThrowIfNull(film);
+        cancellationToken.ThrowIfCancellationRequested();
         CheckedFilm.Require(film);
 
         double? returnMean = film.Cavity.AboveReflectanceByAngle?.LambertianMean;
