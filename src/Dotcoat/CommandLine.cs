@@ -89,6 +89,7 @@ internal static class CommandLine
         {
             SimulateCommand.Create(context),
             FormulateCommand.Create(context),
+            CompareCommand.Create(context),
             InspectCommand.Create(context),
             ReportCommand.Create(context),
             StartCommand.Create(context),

@@ -9,6 +9,12 @@ namespace Dotcoat;
 /// <param name="Delivery">How the result is wanted.</param>
 internal sealed record FilmRequest(IReadOnlyList<string> Overrides, IFilmModel Model, DeliveryRequest Delivery);
 
+/// <summary>What a command that runs every model was asked for.</summary>
+/// <param name="Overrides">KEY=VALUE of --set, in order.</param>
+/// <param name="Settings">What is asked of the models.</param>
+/// <param name="Delivery">How the result is wanted.</param>
+internal sealed record ComparisonRequest(IReadOnlyList<string> Overrides, ModelSettings Settings, DeliveryRequest Delivery);
+
 /// <summary>How a result is wanted.</summary>
 /// <param name="Json">Print the document instead of the tables.</param>
 /// <param name="OutputFolder">Folder to write the document, tables and charts into, or null.</param>
@@ -25,17 +31,12 @@ internal sealed class FilmOptions
         DefaultValueFactory = _ => [],
     };
 
-    private readonly Option<string> _model = new("--model")
-    {
-        Description = "Which model of light in the film.",
-        DefaultValueFactory = _ => FilmModels.Default,
-    };
+    private readonly ModelOptions _model = new();
 
     private readonly DeliveryOptions _delivery = new();
 
     public FilmOptions()
     {
-        _model.AcceptOnlyFromAmong([.. FilmModels.Names]);
         _set.Validators.Add(result =>
         {
             foreach (var token in result.Tokens.Where(t => t.Value.IndexOf('=', StringComparison.Ordinal) < 1))
@@ -46,13 +47,24 @@ internal sealed class FilmOptions
     public void AddTo(Command command)
     {
         command.Options.Add(_set);
-        command.Options.Add(_model);
+        _model.AddTo(command);
         _delivery.AddTo(command);
     }
 
+    /// <summary>The same options for a command that runs every model, so that none is chosen.</summary>
+    public void AddAllModelsTo(Command command)
+    {
+        command.Options.Add(_set);
+        _model.AddAllModelsTo(command);
+        _delivery.AddTo(command);
+    }
+
+    public ComparisonRequest ReadAllModels(ParseResult parsed) =>
+        new(parsed.GetValue(_set) ?? [], _model.Read(parsed), _delivery.Read(parsed));
+
     public FilmRequest Read(ParseResult parsed) => new(
         parsed.GetValue(_set) ?? [],
-        FilmModels.Named(parsed.GetValue(_model)!),
+        FilmModels.Named(_model.NameIn(parsed), _model.Read(parsed)),
         _delivery.Read(parsed));
 }
 

@@ -1,5 +1,3 @@
-using System.Text;
-using System.Text.Encodings.Web;
 using System.Text.Json;
 using Colorimetry;
 using FilmDesign;
@@ -14,8 +12,6 @@ namespace FilmReports;
 /// </remarks>
 public static class ReportJson
 {
-    private static readonly JsonWriterOptions Indented = new() { Indented = true, NewLine = "\n", Encoder = JavaScriptEncoder.UnsafeRelaxedJsonEscaping };
-
     /// <summary>The document of simulate.</summary>
     /// <param name="filmCase">The film.</param>
     /// <param name="appraisal">Its figures.</param>
@@ -23,7 +19,7 @@ public static class ReportJson
     {
         ArgumentNullException.ThrowIfNull(filmCase);
         ArgumentNullException.ThrowIfNull(appraisal);
-        return Document(json => WriteFilm(json, filmCase, appraisal));
+        return JsonDocumentText.Of(json => WriteFilm(json, filmCase, appraisal));
     }
 
     /// <summary>The document of formulate: that of its film, and the solution.</summary>
@@ -31,24 +27,11 @@ public static class ReportJson
     public static string Formulate(Formulation formulation)
     {
         ArgumentNullException.ThrowIfNull(formulation);
-        return Document(json =>
+        return JsonDocumentText.Of(json =>
         {
             WriteFilm(json, formulation.FilmCase, formulation.Appraisal);
             Solution(json, formulation);
         });
-    }
-
-    private static string Document(Action<Utf8JsonWriter> write)
-    {
-        using var bytes = new MemoryStream();
-        using (var json = new Utf8JsonWriter(bytes, Indented))
-        {
-            json.WriteStartObject();
-            write(json);
-            json.WriteEndObject();
-        }
-
-        return Encoding.UTF8.GetString(bytes.GetBuffer(), 0, (int)bytes.Length) + "\n";
     }
 
     private static void WriteFilm(Utf8JsonWriter json, FilmCase filmCase, FilmAppraisal appraisal)
@@ -71,6 +54,8 @@ public static class ReportJson
             Accuracy(json, accuracy);
         if (appraisal.Output.Tracing is { } tracing) // the lines are not independent: their sum has no standard error of its own
             Photons(json, "standard_error", filmCase.Film, tracing.StandardError, sum: null);
+        if (appraisal.Output.Angles is { } angles)
+            Angles(json, filmCase, angles);
         json.WriteStartArray("warnings");
         foreach (string warning in appraisal.Warnings)
             json.WriteStringValue(warning);
@@ -231,6 +216,31 @@ public static class ReportJson
         json.WriteNumber("cells", accuracy.Cells);
         json.WriteNumber("wavelength_bins", accuracy.WavelengthBins);
         json.WriteEndObject();
+    }
+
+    private static void Angles(Utf8JsonWriter json, FilmCase filmCase, AngularOutput angles)
+    {
+        var colours = AngularColour.Of(angles, filmCase.Observer);
+        json.WriteStartObject("angles");
+        List("angle_deg", colours.Select(c => (double?)c.AngleDeg));
+        List("luminance", colours.Select(c => (double?)c.RelativeLuminance));
+        List("u_prime", colours.Select(c => c.Chromaticity?.UPrime));
+        List("v_prime", colours.Select(c => c.Chromaticity?.VPrime));
+        json.WriteEndObject();
+
+        void List(string key, IEnumerable<double?> values)
+        {
+            json.WriteStartArray(key);
+            foreach (double? value in values)
+            {
+                if (value is { } number)
+                    json.WriteNumberValue(number);
+                else
+                    json.WriteNullValue();
+            }
+
+            json.WriteEndArray();
+        }
     }
 
     private static void White(Utf8JsonWriter json, WhitePoint white)

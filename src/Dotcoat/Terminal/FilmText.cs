@@ -42,6 +42,13 @@ internal static class FilmText
         text.Gap().Table(
             ["layer", "thickness µm", "coat g/m²", "optical density"],
             [.. appraisal.Layers.Select(l => new[] { l.Name, Figure.Fixed(l.ThicknessUm, 1), Figure.Fixed(l.CoatWeightGPerM2, 1), Figure.Fixed(l.OpticalDensity, 3) })]);
+        if (appraisal.Output.Angles is { } angles)
+        {
+            text.Gap().Table(
+                ["bare film, exit angle °", "luminance", "u′", "v′"],
+                [.. AngularColour.Of(angles, filmCase.Observer).Select(a => new[] { Figure.Fixed(a.AngleDeg, 0), Figure.Fixed(a.RelativeLuminance, 3), Figure.Fixed(a.Chromaticity?.UPrime, 4), Figure.Fixed(a.Chromaticity?.VPrime, 4) })]);
+        }
+
         if (appraisal.Gamut is { Count: > 0 } gamut)
         {
             text.Gap().Table(
