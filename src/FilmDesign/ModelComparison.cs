@@ -19,8 +19,14 @@ public sealed record ModelComparison
     /// <summary>The reference with one feature taken away at a time.</summary>
     public required IReadOnlyList<FeatureEffect> Features { get; init; }
 
-    /// <summary>Path lengths with which the quick model gives the reference's shares; null where none does.</summary>
+    /// <summary>
+    /// Path lengths with which the quick model gives the reference's unconverted share, and then comes nearest to its white; null where
+    /// no pump path gives that share.
+    /// </summary>
     public required BeerLambertPaths SuggestedPaths { get; init; }
+
+    /// <summary>How far the quick model's white is then from the reference's, in u′v′; null where there are no such paths.</summary>
+    public required double? SuggestedWhiteErrorUv { get; init; }
 
     /// <summary>Compares.</summary>
     /// <param name="filmCase">The film.</param>
@@ -34,13 +40,15 @@ public sealed record ModelComparison
         ArgumentNullException.ThrowIfNull(reference);
         ArgumentNullException.ThrowIfNull(others);
         var exact = Appraise(filmCase, reference, cancellationToken);
+        var (paths, whiteErrorUv) = Paths(filmCase, exact, cancellationToken);
         FilmAppraisal[] models = [exact, .. others.Select(model => Appraise(filmCase, model, cancellationToken))];
         return new ModelComparison
         {
             Models = models,
             Differences = [.. models.Skip(1).SelectMany(model => DifferencesOf(filmCase, exact, model))],
             Features = [.. FilmFeatures.Without(filmCase.Film).Select(f => Effect(filmCase, f.Name, f.Film, exact, reference, cancellationToken))],
-            SuggestedPaths = Paths(filmCase.Film, exact.Output.Budget),
+            SuggestedPaths = paths,
+            SuggestedWhiteErrorUv = whiteErrorUv,
         };
     }
 
@@ -97,16 +105,19 @@ public sealed record ModelComparison
         return new(name, appraisal.Output.Budget.Unconverted, appraisal.Output.Budget.Converted, other, white.DistanceUvTo(other));
     }
 
-    // Unconverted light hangs on the pump path alone, and falls with it; with it set, converted light falls with the emission path.
-    private static BeerLambertPaths Paths(Film film, PhotonBudget wanted)
+    // Unconverted light hangs on the pump path alone, and falls with it; the emission path then shifts light from green to red.
+    private static (BeerLambertPaths Paths, double? WhiteErrorUv) Paths(FilmCase filmCase, FilmAppraisal exact, CancellationToken cancellationToken)
     {
-        var quick = new BeerLambertModel();
-        double? pump = Factor(p => Budget(p, 1).Unconverted - wanted.Unconverted);
-        double? emission = pump is { } at ? Factor(e => Budget(at, e).Converted - wanted.Converted) : null;
-        return new(pump, emission);
+        var (film, quick, wanted) = (filmCase.Film, new BeerLambertModel(), JudgedWhite(filmCase, exact));
+        if (Factor(p => quick.Solve(With(p, 1), cancellationToken).Budget.Unconverted - exact.Output.Budget.Unconverted) is not { } pumpFactor)
+            return (new(null, null), null);
+        double emissionFactor = GoldenSection.Minimum(WhiteErrorUv, 1, LongestPathFactor, 1e-3);
+        return (new(pumpFactor, emissionFactor), WhiteErrorUv(emissionFactor));
 
-        PhotonBudget Budget(double pumpFactor, double emissionFactor) =>
-            quick.Solve(film with { BeerLambertPaths = new(pumpFactor, emissionFactor) }).Budget;
+        Film With(double pump, double emission) => film with { BeerLambertPaths = new(pump, emission) };
+
+        double WhiteErrorUv(double emission) =>
+            wanted.DistanceUvTo(JudgedWhite(filmCase, Appraise(filmCase with { Film = With(pumpFactor, emission) }, quick, cancellationToken)));
     }
 
     private static double? Factor(Func<double, double> excess)

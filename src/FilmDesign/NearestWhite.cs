@@ -61,30 +61,9 @@ internal static class NearestWhite
             return scan[at];
         double width = (high - low) / EdgeSteps;
         double centre = low + (at * width);
-        return Better(scan[at], Refined(Math.Max(low, centre - width), Math.Min(high, centre + width)));
-
-        // Golden section, written out: the library's refuses an interval whose minimum lies at one of its ends, as it often does here.
-        LoadingPoint Refined(double from, double to)
-        {
-            const double Ratio = 0.6180339887498949;
-            var left = (At: to - (Ratio * (to - from)), Point: At(to - (Ratio * (to - from))));
-            var right = (At: from + (Ratio * (to - from)), Point: At(from + (Ratio * (to - from))));
-            while (to - from > LogTolerance)
-            {
-                if (left.Point.DistanceXy < right.Point.DistanceXy)
-                {
-                    (to, right) = (right.At, left);
-                    left = (to - (Ratio * (to - from)), At(to - (Ratio * (to - from))));
-                }
-                else
-                {
-                    (from, left) = (left.At, right);
-                    right = (from + (Ratio * (to - from)), At(from + (Ratio * (to - from))));
-                }
-            }
-
-            return Better(left.Point, right.Point);
-        }
+        double least = GoldenSection.Minimum(
+            p => At(p).DistanceXy, Math.Max(low, centre - width), Math.Min(high, centre + width), LogTolerance);
+        return Better(scan[at], At(least));
 
         LoadingPoint At(double logLoading) => AtLoading(Math.Min(Math.Exp(logLoading), box.Max[moving]));
 

@@ -22,6 +22,7 @@ public static class ComparisonJson
             json.WriteStartObject("suggested_beer_lambert");
             Number(json, "pump_path", comparison.SuggestedPaths.PumpPathFactor);
             Number(json, "emission_path", comparison.SuggestedPaths.EmissionPathFactor);
+            Number(json, "white_error_uv", comparison.SuggestedWhiteErrorUv);
             json.WriteEndObject();
             json.WriteStartArray("warnings");
             foreach (string warning in comparison.Models.SelectMany(m => m.Warnings).Distinct(StringComparer.Ordinal))

@@ -37,7 +37,7 @@ internal static class ComparisonText
                 [.. comparison.Features.Select(f => new[] { f.Feature, Figure.Fixed(f.Unconverted, 4), Figure.Fixed(f.Converted, 4), Figure.Fixed(f.WhiteShiftUv, 4) })]);
         }
 
-        text.Gap().Paragraph(Mending(comparison.SuggestedPaths));
+        text.Gap().Paragraph(Mending(comparison));
         return text.Sentences("Warnings", [.. comparison.Models.SelectMany(m => m.Warnings).Distinct(StringComparer.Ordinal)]).ToString();
     }
 
@@ -61,12 +61,7 @@ internal static class ComparisonText
         : output.Tracing is { } tracing ? $"{Figure.Digits(tracing.StandardError.Converted, 2)} (1 s.e.)"
         : "–";
 
-    private static string Mending(BeerLambertPaths paths) => paths switch
-    {
-        { PumpPathFactor: { } pump, EmissionPathFactor: { } emission } =>
-            $"With beer_lambert: {{pump_path: {Figure.Fixed(pump, 3)}, emission_path: {Figure.Fixed(emission, 3)}}} the quick model gives this film's leakage and converted share.",
-        { PumpPathFactor: { } pump } =>
-            $"With beer_lambert: {{pump_path: {Figure.Fixed(pump, 3)}}} the quick model gives this film's leakage; no emission_path gives its converted share.",
-        _ => "No path lengths make the quick model give this film's leakage.",
-    };
+    private static string Mending(ModelComparison comparison) => comparison.SuggestedPaths is { PumpPathFactor: { } pump, EmissionPathFactor: { } emission }
+        ? $"With beer_lambert: {{pump_path: {Figure.Fixed(pump, 3)}, emission_path: {Figure.Fixed(emission, 3)}}} the quick model gives this film's leakage and comes within {Figure.Fixed(comparison.SuggestedWhiteErrorUv, 4)} in u′v′ of its white. Another film needs other paths."
+        : "No path lengths make the quick model give this film's leakage.";
 }
