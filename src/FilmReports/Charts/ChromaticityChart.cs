@@ -5,171 +5,154 @@ using FilmReports.Drawings;
 
 namespace FilmReports.Charts;
 
-/// <summary>A chromaticity diagram with standards, panel, whites and target, and an inset around the white.</summary>
+/// <summary>A chromaticity diagram with standards, panel, whites and target, and an inset around the white that is judged.</summary>
 internal static class ChromaticityChart
 {
+    private const double LabelSize = 8.5, FieldLeft = 60, FieldTop = 48;
     private static readonly int[] LabelledNm = [450, 470, 480, 490, 500, 510, 520, 530, 540, 550, 560, 570, 580, 590, 600, 620, 700];
-    private static readonly int[] LabelledKelvin = [2000, 3000, 4000, 6500, 10000];
+    private static readonly int[] LabelledKelvin = [2000, 3000, 4000, 5000, 6500, 10000];
 
     public static Drawing Of(FilmCase filmCase, FilmAppraisal appraisal, ChromaticityDiagram diagram, Palette palette)
     {
-        bool xy = diagram == ChromaticityDiagram.Xy1931;
-        var field = new Box(62, 44, 602, xy ? 644 : 584);
-        var plot = new Plot(palette, field, xy ? (0, 0.8) : (0, 0.65), xy ? (0, 0.9) : (0, 0.65), new Box(8, 44, 632, field.Bottom));
-        Locus(plot, diagram, palette);
-        plot.Axes(0.1, xy ? "x" : "u′", 0.1, xy ? "y" : "v′", "0.0");
-        Planckian(plot, diagram, palette, labelled: true);
-        StandardTriangles(plot, [.. Standards(filmCase)], appraisal, diagram, palette);
-        if (appraisal.Panel is { } panel)
-            plot.Inside(new Shape([.. new[] { panel.Red, panel.Green, panel.Blue }.Select(c => At(plot, diagram, c))], Closed: true, palette.Ink, 0.08, new Stroke(palette.Ink, 1.8)));
-        Whites(plot, filmCase, appraisal, diagram, palette, labelled: false);
-        var inset = Inset(filmCase, appraisal, diagram, palette, xy ? new Box(398, 70, 592, 264) : new Box(392, 380, 586, 570));
+        bool isXy = diagram == ChromaticityDiagram.Xy1931;
+        // Equal scales across and up, or triangles would lie about their shape.
+        double pointsPerUnit = isXy ? 640 : 800;
+        (double From, double To) across = isXy ? (-0.06, 0.78) : (-0.03, 0.65), up = isXy ? (-0.02, 0.88) : (-0.01, 0.63);
+        var field = new Box(
+            FieldLeft, FieldTop, FieldLeft + ((across.To - across.From) * pointsPerUnit), FieldTop + ((up.To - up.From) * pointsPerUnit));
+        var plot = new Plot(palette, field, across, up);
+        var scale = new ChromaticityScale(plot, diagram);
+        var inset = new WhiteInset(filmCase, appraisal, diagram, isXy
+            ? new Box(field.Right - 192, field.Top + 4, field.Right - 4, field.Top + 188)
+            : new Box(field.Right - 186, field.Bottom - 176, field.Right - 4, field.Bottom - 4), palette);
+        plot.Labels.KeepOff(inset.Frame);
+        Locus(scale, palette);
+        plot.Axes(0.1, scale.AxisNames.Across, 0.1, scale.AxisNames.Up);
+        Triangles(scale, filmCase, appraisal, palette);
+        Whites(scale, filmCase, appraisal, palette);
+        Planckian(scale, palette);
+        plot.Inside(new Shape(scale.At(inset.Corners), Closed: true, null, 1, new Stroke(palette.Faint, 0.6)));
+        string name = isXy ? "CIE 1931 xy" : "CIE 1976 u′v′";
         return new Drawing(
-            xy ? "chromaticity-1931" : "chromaticity-1976",
-            xy ? "CIE 1931 chromaticity" : "CIE 1976 chromaticity",
-            Description(filmCase, appraisal),
-            640,
+            isXy ? "chromaticity-1931" : "chromaticity-1976",
+            $"{name} chromaticity diagram",
+            Description(filmCase, appraisal, diagram),
+            field.Right + 22,
             field.Bottom + 44,
             [
-                new Words(xy ? "CIE 1931 xy" : "CIE 1976 u′v′", new(field.Left, 26), TextAnchor.Start, 13, TextWeight.SemiBold, palette.Ink),
-                new Words("tint: what a screen can show, pale; dotted: where sRGB ends", new(602, 26), TextAnchor.End, 9, TextWeight.Regular, palette.Faint),
+                new Words(name, new(field.Left, 26), TextAnchor.Start, 13, TextWeight.SemiBold, palette.Ink),
+                new Words(
+                    "tint: the direction of a colour as sRGB can show it; beyond the dotted line it cannot", new(field.Right, 26), TextAnchor.End, 9, TextWeight.Regular, palette.Faint),
                 .. plot.Marks,
-                .. inset,
+                .. inset.Marks(),
             ]);
     }
 
-    private static Spot At(Plot plot, ChromaticityDiagram diagram, Chromaticity c) =>
-        diagram == ChromaticityDiagram.Xy1931 ? plot.At(c.X, c.Y) : plot.At(c.UPrime, c.VPrime);
+    /// <summary>The standards a film is compared with; those of the same primaries share one triangle and one label.</summary>
+    internal static IReadOnlyList<(string Name, ColourGamut Gamut)> Standards(FilmAppraisal appraisal) =>
+    [
+        .. (appraisal.Gamut ?? [])
+            .Select(comparison => ColourGamut.Named(comparison.Name))
+            .GroupBy(standard => (standard.Red, standard.Green, standard.Blue))
+            .Select(same => (string.Join(", ", same.Select(standard => standard.Name)), same.First())),
+    ];
 
-    private static IEnumerable<ColourGamut> Standards(FilmCase filmCase) =>
-        (filmCase.Target?.Gamuts is { Count: > 0 } names ? names : ["BT.2020", "DCI-P3"])
-        .Select(ColourGamut.Named)
-        .DistinctBy(standard => (standard.Red, standard.Green, standard.Blue));
-
-    private static void Locus(Plot plot, ChromaticityDiagram diagram, Palette palette)
+    private static void Locus(ChromaticityScale scale, Palette palette)
     {
-        var observer = StandardObserver.Cie1931;
-        var locus = new List<Spot>();
-        for (int nm = 380; nm <= 700; nm++)
-            locus.Add(At(plot, diagram, Monochromatic(observer, nm)));
-        plot.Inside(ChromaticityGround.Marks(plot, diagram, palette.Ground, locus));
-        var srgb = ColourGamut.Named("BT.709");
+        var plot = scale.Plot;
+        Spot[] locus = [.. Enumerable.Range(380, 321).Select(nm => scale.At(Monochromatic(nm)))];
+        plot.Inside(ChromaticityGround.Marks(scale, palette.Ground, locus));
+        var srgb = ColourGamut.Named("BT.709"); // sRGB has its primaries: IEC 61966-2-1.
         plot.Inside(
             new Shape(locus, Closed: true, null, 1, new Stroke(palette.Ink, 1.1)),
-            new Shape([At(plot, diagram, srgb.Red), At(plot, diagram, srgb.Green), At(plot, diagram, srgb.Blue)], Closed: true, null, 1, new Stroke(palette.Faint, 2.2, [1.2, 3])));
+            new Shape(scale.At(srgb.Red, srgb.Green, srgb.Blue), Closed: true, null, 1, new Stroke(palette.Faint, 2.2, [1.2, 3])));
         foreach (int nm in LabelledNm)
         {
-            var on = At(plot, diagram, Monochromatic(observer, nm));
-            var (before, after) = (At(plot, diagram, Monochromatic(observer, nm - 3)), At(plot, diagram, Monochromatic(observer, nm + 3)));
+            var (on, before, after) = (scale.At(Monochromatic(nm)), scale.At(Monochromatic(nm - 3)), scale.At(Monochromatic(nm + 3)));
             // The locus runs with the colours inside on its right, so outward is to the left of its direction.
             double dx = after.X - before.X, dy = after.Y - before.Y, length = Math.Sqrt((dx * dx) + (dy * dy)) + 1e-9;
             (double X, double Y) outward = (dy / length, -dx / length);
             plot.Over(new Shape([on, new(on.X + (outward.X * 4), on.Y + (outward.Y * 4))], Closed: false, null, 1, new Stroke(palette.Ink, 0.9)));
-            plot.Over(plot.Labels.Place(nm.ToString(CultureInfo.InvariantCulture), on, 8.5, palette.Faint, palette.Ground, 7, outward));
+            plot.Over(plot.Labels.Place(nm.ToString(CultureInfo.InvariantCulture), on, LabelSize, palette.Faint, palette.Ground, 7, outward));
         }
     }
 
-    private static Chromaticity Monochromatic(StandardObserver observer, int nm)
+    private static Chromaticity Monochromatic(int nm)
     {
-        int i = WavelengthGrid.IndexOf(nm);
+        var (observer, i) = (StandardObserver.Cie1931, WavelengthGrid.IndexOf(nm));
         return new Tristimulus(observer.XBar[i], observer.YBar[i], observer.ZBar[i]).Chromaticity;
     }
 
-    private static void Planckian(Plot plot, ChromaticityDiagram diagram, Palette palette, bool labelled)
+    private static void Planckian(ChromaticityScale scale, Palette palette)
     {
-        var line = Enumerable.Range(0, 120).Select(i => PlanckianLocus.At(1e6 / (40 + (i * 5)))).ToArray();
-        plot.Inside(new Shape([.. line.Select(c => At(plot, diagram, c))], Closed: false, null, 1, new Stroke(palette.Faint, 0.9)));
-        foreach (int kelvin in labelled ? LabelledKelvin : [])
+        scale.Plot.Inside(PlanckianLine(scale, palette));
+        foreach (int kelvin in LabelledKelvin)
         {
-            var on = At(plot, diagram, PlanckianLocus.At(kelvin));
-            plot.Over(new Disc(on, 1.6, palette.Faint, null));
-            plot.Over(plot.Labels.Place($"{kelvin.ToString(CultureInfo.InvariantCulture)}\u2009K", on, 8.5, palette.Faint, palette.Ground, 6, (0.2, 1)));
+            var on = scale.At(PlanckianLocus.At(kelvin));
+            scale.Plot.Over(new Disc(on, 1.5, palette.Faint, null));
+            scale.Plot.Over(scale.Plot.Labels.Place(
+                $"{kelvin.ToString(CultureInfo.InvariantCulture)}\u2009K", on, LabelSize, palette.Faint, palette.Ground, 5, (0, 1)));
         }
     }
 
-    private static void StandardTriangles(Plot plot, IReadOnlyList<ColourGamut> standards, FilmAppraisal appraisal, ChromaticityDiagram diagram, Palette palette)
+    /// <summary>Black bodies from 25 000 K to 1560 K.</summary>
+    internal static Mark PlanckianLine(ChromaticityScale scale, Palette palette) => new Shape(
+        [.. Enumerable.Range(0, 121).Select(i => scale.At(PlanckianLocus.At(1e6 / (40 + (i * 5)))))], Closed: false, null, 1, new Stroke(palette.Faint, 0.9));
+
+    private static void Triangles(ChromaticityScale scale, FilmCase filmCase, FilmAppraisal appraisal, Palette palette)
     {
-        var triangles = standards.Select(s => new[] { At(plot, diagram, s.Red), At(plot, diagram, s.Green), At(plot, diagram, s.Blue) }).ToList();
-        foreach (var corners in triangles)
-            plot.Inside(new Shape(corners, Closed: true, null, 1, new Stroke(palette.Ink, 0.7)));
-        if (appraisal.Panel is { } panel)
-            triangles.Add([At(plot, diagram, panel.Red), At(plot, diagram, panel.Green), At(plot, diagram, panel.Blue)]);
-        for (int i = 0; i < standards.Count; i++)
-            plot.Over(EdgeLabel.Place(plot.Labels, standards[i].Name, i, triangles, palette));
+        if (appraisal.Panel is not { } panel)
+            return;
+        var standards = Standards(appraisal);
+        List<Spot[]> triangles = [.. standards.Select(s => scale.At(s.Gamut.Red, s.Gamut.Green, s.Gamut.Blue)), scale.At(panel.Red, panel.Green, panel.Blue)];
+        foreach (var corners in triangles.SkipLast(1))
+            scale.Plot.Inside(new Shape(corners, Closed: true, null, 1, new Stroke(palette.Ink, 0.7)));
+        scale.Plot.Inside(new Shape(triangles[^1], Closed: true, palette.Ink, 0.08, new Stroke(palette.Ink, 1.8)));
+        // Names keep clear of the whites, which are labelled later.
+        foreach (var white in WhitesOf(filmCase, appraisal))
+            scale.Plot.Labels.KeepOff(Box.About(scale.At(white), 8));
+        for (int i = 0; i < triangles.Count; i++)
+            scale.Plot.Over(EdgeLabel.Place(scale.Plot.Labels, i < standards.Count ? standards[i].Name : "panel", i, triangles, palette));
     }
 
-    private static void Whites(Plot plot, FilmCase filmCase, FilmAppraisal appraisal, ChromaticityDiagram diagram, Palette palette, bool labelled)
+    private static IEnumerable<Chromaticity> WhitesOf(FilmCase filmCase, FilmAppraisal appraisal)
     {
-        double size = labelled ? 1 : 0.8;
+        yield return appraisal.FilmWhite.Chromaticity;
+        if (appraisal.Panel is { } panel)
+            yield return panel.White.Chromaticity;
         if (filmCase.Target is { } target)
-        {
-            var wanted = new Chromaticity(target.WhiteX, target.WhiteY);
-            var outline = Enumerable.Range(0, 48).Select(i => i * Math.PI / 24).Select(a =>
-                At(plot, diagram, new(wanted.X + (target.ToleranceXy * Math.Cos(a)), wanted.Y + (target.ToleranceXy * Math.Sin(a)))));
-            var at = At(plot, diagram, wanted);
-            plot.Inside(new Shape([.. outline], Closed: true, null, 1, new Stroke(palette.Ink, 0.9)));
-            plot.Inside(Cross(at, 6 * size, palette.Ink));
-            Label("target", at, (1, -1));
-        }
+            yield return new(target.WhiteX, target.WhiteY);
+    }
 
-        var film = At(plot, diagram, appraisal.FilmWhite.Chromaticity);
-        plot.Inside(new Disc(film, 4.5 * size, null, new Stroke(palette.Ink, 1.6)));
-        Label("film white", film, (1, 0));
+    private static void Whites(ChromaticityScale scale, FilmCase filmCase, FilmAppraisal appraisal, Palette palette)
+    {
+        var plot = scale.Plot;
+        plot.Inside(WhiteMarks.Of(scale, filmCase, appraisal, palette, 0.8));
+        Label("film white", appraisal.FilmWhite.Chromaticity, (-1, 0));
         if (appraisal.Panel is { } panel)
-        {
-            var white = At(plot, diagram, panel.White.Chromaticity);
-            plot.Inside(new Disc(white, 3.2 * size, palette.Ink, null));
-            Label("panel white", white, (-1, 1));
-        }
+            Label("panel white", panel.White.Chromaticity, (1, -1));
 
-        void Label(string text, Spot at, (double X, double Y) prefer)
+        void Label(string text, Chromaticity white, (double X, double Y) prefer)
         {
-            if (!labelled)
-                return;
-            plot.Labels.KeepOff(Box.About(at, 5));
-            plot.Over(plot.Labels.Place(text, at, 9, palette.Ink, palette.Ground, 9, prefer));
+            plot.Labels.KeepOff(Box.About(scale.At(white), 4));
+            plot.Over(plot.Labels.Place(text, scale.At(white), LabelSize, palette.Ink, palette.Ground, 12, prefer));
         }
     }
 
-    private static IEnumerable<Mark> Cross(Spot at, double arm, string colour)
+    private static string Description(FilmCase filmCase, FilmAppraisal appraisal, ChromaticityDiagram diagram)
     {
-        var stroke = new Stroke(colour, 1.1);
-        yield return new Shape([new(at.X - arm, at.Y), new(at.X + arm, at.Y)], Closed: false, null, 1, stroke);
-        yield return new Shape([new(at.X, at.Y - arm), new(at.X, at.Y + arm)], Closed: false, null, 1, stroke);
-    }
-
-    private static IReadOnlyList<Mark> Inset(FilmCase filmCase, FilmAppraisal appraisal, ChromaticityDiagram diagram, Palette palette, Box frame)
-    {
-        var shown = new List<Chromaticity> { appraisal.FilmWhite.Chromaticity };
+        string text = $"Film white at {Point(appraisal.FilmWhite.Chromaticity)}.";
         if (appraisal.Panel is { } panel)
-            shown.Add(panel.White.Chromaticity);
+            text += $" Panel white at {Point(panel.White.Chromaticity)}; red {Point(panel.Red)}; green {Point(panel.Green)}; blue {Point(panel.Blue)}.";
         if (filmCase.Target is { } target)
-            shown.Add(new(target.WhiteX, target.WhiteY));
-        bool xy = diagram == ChromaticityDiagram.Xy1931;
-        var across = shown.Select(c => xy ? c.X : c.UPrime).ToArray();
-        var up = shown.Select(c => xy ? c.Y : c.VPrime).ToArray();
-        double span = Math.Max(Math.Max(across.Max() - across.Min(), up.Max() - up.Min()) * 1.6, 0.004);
-        double midX = (across.Max() + across.Min()) / 2, midY = (up.Max() + up.Min()) / 2;
-        var field = new Box(frame.Left + 44, frame.Top + 8, frame.Right - 8, frame.Bottom - 34);
-        var plot = new Plot(palette, field, (midX - (span / 2), midX + (span / 2)), (midY - (span / 2), midY + (span / 2)));
-        double step = Plot.NiceStep(span, 3);
-        plot.Axes(step, xy ? "x" : "u′", step, xy ? "y" : "v′", step < 0.001 ? "0.0000" : step < 0.01 ? "0.000" : "0.00");
-        Planckian(plot, diagram, palette, labelled: false);
-        Whites(plot, filmCase, appraisal, diagram, palette, labelled: true);
-        return [new Shape(frame.Corners, Closed: true, palette.Ground, 1, new Stroke(palette.Hairline, 1)), .. plot.Marks];
-    }
+            text += $" Target {Point(new(target.WhiteX, target.WhiteY))}.";
+        var names = Standards(appraisal).Select(s => s.Name).ToList();
+        return names.Count > 0 ? $"{text} Triangles of {string.Join(", ", names)}." : text;
 
-    private static string Description(FilmCase filmCase, FilmAppraisal appraisal)
-    {
-        string text = $"Film white at x {Digits(appraisal.FilmWhite.Chromaticity.X)}, y {Digits(appraisal.FilmWhite.Chromaticity.Y)}.";
-        if (appraisal.Panel is { } panel)
+        string Point(Chromaticity c)
         {
-            text += $" Panel white at x {Digits(panel.White.Chromaticity.X)}, y {Digits(panel.White.Chromaticity.Y)};"
-                + $" red {Digits(panel.Red.X)}, {Digits(panel.Red.Y)}; green {Digits(panel.Green.X)}, {Digits(panel.Green.Y)}; blue {Digits(panel.Blue.X)}, {Digits(panel.Blue.Y)}.";
+            var (across, up) = ChromaticityScale.Coordinates(diagram, c);
+            return string.Create(CultureInfo.InvariantCulture, $"{across:0.0000}, {up:0.0000}");
         }
-
-        return filmCase.Target is { } target ? $"{text} Target x {Digits(target.WhiteX)}, y {Digits(target.WhiteY)}." : text;
     }
-
-    private static string Digits(double value) => value.ToString("0.0000", CultureInfo.InvariantCulture);
 }

@@ -1,3 +1,4 @@
+using System.Globalization;
 using Colorimetry;
 using FilmReports.Drawings;
 
@@ -8,41 +9,78 @@ namespace FilmReports.Charts;
 internal static class ChromaticityGround
 {
     private const double Saturation = 0.25;
-    private const int Cells = 60;
 
-    // How far beyond sRGB, in units of its most negative channel, the tint takes to fade.
-    private const double FadeChannel = 0.9;
+    // Tiles are this wide and high, points, and tints differ by this much: neither step can be seen.
+    private const double Tile = 4;
+    private const int TintStep = 3;
 
-    public static IEnumerable<Mark> Marks(Plot plot, ChromaticityDiagram diagram, string ground, IReadOnlyList<Spot> locus)
+    // How far beyond sRGB, in units of its most negative channel, the tint takes to fade, and what is left of it.
+    private const double FadeChannel = 0.9, FadedShare = 0.25;
+
+    /// <summary>The ground, cut off at the locus.</summary>
+    /// <param name="scale">Where chromaticities lie.</param>
+    /// <param name="ground">Colour of the paper, #rrggbb.</param>
+    /// <param name="locus">The spectral locus, a convex outline.</param>
+    public static IEnumerable<Mark> Marks(ChromaticityScale scale, string ground, IReadOnlyList<Spot> locus)
     {
-        var tiles = new List<Mark>();
-        double stepX = (plot.X.To - plot.X.From) / Cells, stepY = (plot.Y.To - plot.Y.From) / Cells;
-        for (int i = 0; i < Cells; i++)
+        var tiles = new Dictionary<string, List<Box>>(StringComparer.Ordinal);
+        double firstTop = Math.Floor(locus.Min(s => s.Y) / Tile) * Tile, bottom = locus.Max(s => s.Y);
+        for (double top = firstTop; top < bottom; top += Tile)
         {
-            for (int j = 0; j < Cells; j++)
+            var (left, right) = Extent(locus, top, top + Tile);
+            double from = Math.Floor(left / Tile) * Tile;
+            string? run = null;
+            for (double x = from; x < right; x += Tile)
             {
-                double x = plot.X.From + (i * stepX), y = plot.Y.From + (j * stepY);
-                var middle = Of(diagram, x + (stepX / 2), y + (stepY / 2));
-                if (Tint(middle, ground) is not { } tint)
-                    continue;
-                // Half a point of overlap: neighbours of slightly different tint must not show seams.
-                var (a, b) = (plot.At(x, y + stepY), plot.At(x + stepX, y));
-                tiles.Add(new Shape(new Box(a.X, a.Y, b.X + 0.5, b.Y + 0.5).Corners, Closed: true, tint, 1, null));
+                string tint = Tint(scale.ChromaticityAt(new(x + (Tile / 2), top + (Tile / 2))), ground);
+                if (run is not null && tint != run)
+                {
+                    Keep(run, new(from, top, x, top + Tile));
+                    from = x;
+                }
+
+                run = tint;
+            }
+
+            if (run is not null)
+                Keep(run, new(from, top, Math.Ceiling(right / Tile) * Tile, top + Tile));
+        }
+
+        yield return new Window(locus, [.. tiles.Select(t => new Tiles(t.Key, t.Value))]);
+
+        void Keep(string tint, Box box)
+        {
+            if (!tiles.TryGetValue(tint, out var boxes))
+                tiles.Add(tint, boxes = []);
+            boxes.Add(box);
+        }
+    }
+
+    // How far a convex outline reaches to the left and right between two heights.
+    private static (double Left, double Right) Extent(IReadOnlyList<Spot> outline, double top, double bottom)
+    {
+        double left = double.PositiveInfinity, right = double.NegativeInfinity;
+        for (int i = 0; i < outline.Count; i++)
+        {
+            var (a, b) = outline[i].Y <= outline[(i + 1) % outline.Count].Y
+                ? (outline[i], outline[(i + 1) % outline.Count])
+                : (outline[(i + 1) % outline.Count], outline[i]);
+            if (b.Y < top || a.Y > bottom)
+                continue;
+            foreach (double y in new[] { Math.Clamp(top, a.Y, b.Y), Math.Clamp(bottom, a.Y, b.Y) })
+            {
+                double x = b.Y > a.Y ? a.X + ((y - a.Y) / (b.Y - a.Y) * (b.X - a.X)) : b.X;
+                (left, right) = (Math.Min(left, x), Math.Max(right, x));
             }
         }
 
-        yield return new Window(locus, tiles);
+        return (left, right);
     }
 
-    /// <summary>A point of either diagram as a chromaticity.</summary>
-    public static Chromaticity Of(ChromaticityDiagram diagram, double horizontal, double vertical) =>
-        diagram == ChromaticityDiagram.Xy1931 ? new(horizontal, vertical) : Chromaticity.FromUvPrime(horizontal, vertical);
-
-    private static string? Tint(Chromaticity colour, string ground)
+    private static string Tint(Chromaticity colour, string ground)
     {
-        if (!(colour.Y > 0.005) || colour.X < -0.02 || colour.X + colour.Y > 1.03)
-            return null;
-        double bigX = colour.X / colour.Y, bigZ = Math.Max(0, 1 - colour.X - colour.Y) / colour.Y;
+        // Just outside the locus a coordinate may be 0 or below: the tile is cut off there, its tint is that of the edge.
+        double y = Math.Max(colour.Y, 0.005), bigX = Math.Max(0, colour.X) / y, bigZ = Math.Max(0, 1 - colour.X - colour.Y) / y;
         // Linear sRGB from XYZ: IEC 61966-2-1.
         double[] rgb =
         [
@@ -50,14 +88,15 @@ internal static class ChromaticityGround
             (-0.9689 * bigX) + 1.8758 + (0.0415 * bigZ),
             (0.0557 * bigX) - 0.2040 + (1.0570 * bigZ),
         ];
-        double top = rgb.Max(), beyond = Math.Max(0, -rgb.Min() / top);
-        double strength = Saturation * Math.Max(0.25, 1 - (beyond / FadeChannel));
+        double highest = rgb.Max(), beyond = Math.Max(0, -rgb.Min() / highest);
+        double strength = Saturation * Math.Max(FadedShare, 1 - (beyond / FadeChannel));
         var result = "#";
         for (int c = 0; c < 3; c++)
         {
-            double encoded = Encode(Math.Max(rgb[c], 0) / top) * 255;
-            int paper = Convert.ToInt32(ground.Substring(1 + (2 * c), 2), 16);
-            result += ((int)Math.Round(paper + (strength * (encoded - paper)))).ToString("x2", System.Globalization.CultureInfo.InvariantCulture);
+            double encoded = Encode(Math.Max(rgb[c], 0) / highest) * 255;
+            int paper = int.Parse(ground.AsSpan(1 + (2 * c), 2), NumberStyles.HexNumber, CultureInfo.InvariantCulture);
+            int channel = (int)Math.Round((paper + (strength * (encoded - paper))) / TintStep) * TintStep;
+            result += Math.Min(channel, 255).ToString("x2", CultureInfo.InvariantCulture);
         }
 
         return result;

@@ -10,7 +10,7 @@ internal static class FatesChart
     /// <summary>Losses below this share are drawn together.</summary>
     internal const double PooledShare = 0.005;
 
-    private const double FullWidth = 190, FirstTop = 60, Gap = 14, MinPitch = 26, Left = 40, Right = 470;
+    private const double LossLabelRoom = 120, FullWidth = 190, FirstTop = 60, Gap = 14, MinPitch = 26, Left = 40, Right = 470;
 
     /// <summary>A stream of the picture.</summary>
     /// <param name="Name">What becomes of the photons.</param>
@@ -42,8 +42,8 @@ internal static class FatesChart
             marks.Add(Ribbon(y, outY, width, stream.Colour));
             var label = new Spot(Right + 26, outY + Math.Max(width / 2, 4));
             if (stream.Mark is { } mark)
-                marks.Add(SpectrumChart.Sign(mark, new(Right + 12, label.Y), 4, stream.Colour));
-            marks.Add(new Words(stream.Name, new(label.X, label.Y - 1), TextAnchor.Start, 10, TextWeight.SemiBold, palette.Ink));
+                marks.Add(LightMarks.Sign(mark, new(Right + 12, label.Y), 4, stream.Colour));
+            marks.Add(new Words(InterFont.Fitted(stream.Name, 10, TextWeight.SemiBold, 640 - label.X - 10), new(label.X, label.Y - 1), TextAnchor.Start, 10, TextWeight.SemiBold, palette.Ink));
             marks.Add(new Words(Percent(stream.Share), new(label.X, label.Y + 11), TextAnchor.Start, 9.5, TextWeight.Regular, palette.Ink));
             y += width;
             outY += Math.Max(width, MinPitch) + Gap;
@@ -58,7 +58,7 @@ internal static class FatesChart
         for (int i = 0; i < losses.Length; i++)
         {
             double width = Width(losses[i]);
-            string[] lines = losses[i].Name.Split('|');
+            string[] lines = [.. losses[i].Name.Split('|').Select(line => InterFont.Fitted(line, 9, TextWeight.Regular, LossLabelRoom))];
             double labelWidth = lines.Max(line => InterFont.WidthOf(line, 9, TextWeight.Regular));
             x = Math.Max(x, labelEnd + 10 + ((labelWidth - width) / 2));
             double from = lossTop + lossHeight - width;
@@ -92,8 +92,8 @@ internal static class FatesChart
             var light = appraisal.Output.ConvertedByLot[i];
             if (light.Integral <= 0)
                 continue;
-            var (colour, _, mark) = palette.OfEmitter(SpectrumChart.PeakNm(light));
-            streams.Add(new(filmCase.Film.Lots[i].Name, light.Integral, colour, true, mark));
+            var (colour, _, mark) = palette.OfEmitter(LightMarks.PeakNm(filmCase.Film.Lots[i].Emission));
+            streams.Add(new(ChartNames.OfLot(filmCase.Film, i), light.Integral, colour, true, mark));
         }
 
         var losses = new List<Stream>
@@ -103,7 +103,7 @@ internal static class FatesChart
             Loss("lost in host", budget.LostInHost),
             Loss("lost at edges", budget.LostAtEdges),
         };
-        losses.AddRange(filmCase.Film.Lots.Select((lot, i) => Loss($"not emitted by|{lot.Name}", budget.LostInLots[i])));
+        losses.AddRange(filmCase.Film.Lots.Select((_, i) => Loss($"lost in|{ChartNames.OfLot(filmCase.Film, i)}", budget.LostInLots[i])));
         streams.AddRange(losses.Where(l => l.Share >= PooledShare));
         double pooled = losses.Where(l => l.Share < PooledShare).Sum(l => l.Share);
         if (pooled > 0)

@@ -5,83 +5,85 @@ using FilmReports.Drawings;
 
 namespace FilmReports.Charts;
 
-/// <summary>Absorption of each lot at its loading and its emission, with the source: what overlaps with what.</summary>
+/// <summary>Optical density that each lot gives the film at its loading, with its emission and the source: what overlaps with what.</summary>
 internal static class LotChart
 {
-    private const int FromNm = 400, ToNm = 740;
-    private const double RowHeight = 150;
+    private const double RowHeight = 150, RowPitch = RowHeight + 66, FirstTop = 66, Left = 66, Right = 586;
 
     public static Drawing Of(FilmCase filmCase, Palette palette)
     {
         var film = filmCase.Film;
-        DotLot[] used = [.. film.Lots.Where(lot => film.Layers.Any(layer => layer.Dots.Any(dots => dots.Lot.Name == lot.Name)))];
+        int[] used = [.. Enumerable.Range(0, film.Lots.Count).Where(i => LayersWith(film, film.Lots[i]).Any())];
         var marks = new List<Mark>
         {
-            new Words("Lots in the film: absorption and emission", new(66, 26), TextAnchor.Start, 13, TextWeight.SemiBold, palette.Ink),
+            new Words("Lots in the film: absorption and emission", new(Left, 26), TextAnchor.Start, 13, TextWeight.SemiBold, palette.Ink),
+            new Words("emission and source: relative", new(Right, 26), TextAnchor.End, 9, TextWeight.Regular, palette.Faint),
         };
-        for (int i = 0; i < used.Length; i++)
-            marks.AddRange(Row(film, used[i], 52 + (i * (RowHeight + 62)), palette));
+        for (int row = 0; row < used.Length; row++)
+            marks.AddRange(Row(film, used[row], FirstTop + (row * RowPitch), palette));
         if (used.Length == 0)
-            marks.Add(new Words("No layer holds dots.", new(66, 60), TextAnchor.Start, 10, TextWeight.Regular, palette.Ink));
+            marks.Add(new Words("No layer holds dots.", new(Left, 60), TextAnchor.Start, 10, TextWeight.Regular, palette.Ink));
         return new Drawing(
             "lots",
             "Absorption and emission of the lots in the film",
-            string.Join(' ', used.Select(lot => string.Create(CultureInfo.InvariantCulture, $"{lot.Name}: emission peak {SpectrumChart.PeakNm(lot.Emission)} nm, yield in film {lot.FilmYieldShare:0.000}."))),
+            used.Length == 0 ? "No layer holds dots." : string.Join(' ', used.Select(i => string.Create(
+                CultureInfo.InvariantCulture, $"{film.Lots[i].Name}: emission peak {LightMarks.PeakNm(film.Lots[i].Emission)} nm, yield in film {film.Lots[i].FilmYieldShare:0.000}."))),
             640,
-            Math.Max(90, 52 + (used.Length * (RowHeight + 62))),
+            used.Length == 0 ? 90 : FirstTop + (used.Length * RowPitch) - 22,
             marks);
     }
 
-    private static IReadOnlyList<Mark> Row(Film film, DotLot lot, double top, Palette palette)
+    private static IReadOnlyList<Mark> Row(Film film, int index, double top, Palette palette)
     {
-        var absorptance = Enumerable.Range(FromNm, ToNm - FromNm + 1).Select(nm => (Nm: nm, Share: Absorptance(film, lot, nm))).ToArray();
-        double highest = absorptance.Max(a => a.Share);
-        double step = Plot.NiceStep(Math.Max(highest, 1e-6), 4);
-        double limit = Math.Ceiling(Math.Max(highest, 1e-6) * 1.15 / step) * step;
-        var plot = new Plot(palette, new Box(66, top, 586, top + RowHeight), (FromNm, ToNm), (0, limit), new Box(66, top - 16, 632, top + RowHeight));
-        plot.Axes(20, "wavelength / nm", step, "absorbed in one pass", "0", step < 0.01 ? "0.000" : step < 0.1 ? "0.00" : "0.0");
-        var (colour, dash, mark) = palette.OfEmitter(SpectrumChart.PeakNm(lot.Emission));
-        Area(plot, film.Backlight.Photons.Samples, film.Backlight.Photons.Peak, limit, palette.Source);
-        Area(plot, lot.Emission.Samples, lot.Emission.Peak, limit, colour);
-        plot.Line(absorptance.Select(a => ((double)a.Nm, a.Share)), new Stroke(palette.Ink, 1.8));
-        plot.Line(Enumerable.Range(FromNm, ToNm - FromNm + 1).Select(nm => ((double)nm, lot.Emission[nm] / lot.Emission.Peak * limit * 0.95)), new Stroke(colour, 1.8, dash));
-        foreach (var (nm, share) in absorptance.Where((_, i) => i % 3 == 0))
-            plot.Labels.KeepOff(Box.About(plot.At(nm, share), 2));
-        int peakNm = SpectrumChart.PeakNm(lot.Emission);
-        var peak = plot.At(peakNm, limit * 0.95);
-        plot.Over(SpectrumChart.Sign(mark, peak, 4, colour));
+        var lot = film.Lots[index];
+        var (fromNm, toNm) = LightMarks.Range([lot.Emission, film.Backlight.Photons]);
+        int[] axis = [.. Enumerable.Range(fromNm, toNm - fromNm + 1)];
+        double[] density = [.. axis.Select(nm => OpticalDensity(film, lot, nm))];
+        double highest = Math.Max(density.Max(), 1e-6), step = Plot.NiceStep(highest, 4), limit = Math.Ceiling(highest * 1.15 / step) * step;
+        var plot = new Plot(palette, new Box(Left, top, Right, top + RowHeight), (fromNm, toNm), (0, limit));
+        plot.Axes(20, "wavelength / nm", step, "optical density");
+        var (colour, dash, mark) = palette.OfEmitter(LightMarks.PeakNm(lot.Emission));
+        Area(plot, film.Backlight.Photons, palette.Source);
+        Area(plot, lot.Emission, colour);
+        plot.Line(axis.Select((nm, i) => ((double)nm, density[i])), new Stroke(palette.Ink, 1.8));
+        plot.Line(axis.Select(nm => ((double)nm, Relative(lot.Emission, nm, limit))), new Stroke(colour, 1.8, dash));
+        int peakNm = LightMarks.PeakNm(lot.Emission), sourceNm = LightMarks.PeakNm(film.Backlight.Photons);
+        var peak = plot.At(peakNm, Relative(lot.Emission, peakNm, limit));
+        plot.Over(LightMarks.Sign(mark, peak, 4, colour));
         plot.Labels.KeepOff(Box.About(peak, 5));
-        plot.Over(plot.Labels.Place("emission", peak, 9.5, palette.Ink, palette.Ground, 8, (1, 0)));
-        int sourceNm = SpectrumChart.PeakNm(film.Backlight.Photons);
-        plot.Over(plot.Labels.Place("source", plot.At(sourceNm, limit * 0.3), 9.5, palette.Ink, palette.Ground, 12, (1, 0)));
-        plot.Over(plot.Labels.Place("absorption", plot.At(FromNm + 12, absorptance[12].Share), 9.5, palette.Ink, palette.Ground, 8, (1, -1)));
+        Label("emission", peak, (1, 0));
+        Label("source", plot.At(sourceNm, Relative(film.Backlight.Photons, sourceNm, limit)), (1, 0));
+        Label("absorption", plot.At(fromNm, density[0]), (1, -1));
+        string heading = string.Create(
+            CultureInfo.InvariantCulture, $"{ChartNames.OfLot(film, index)}: {LoadingText(film, lot)}, yield in film {lot.FilmYieldShare:0.000}");
         return
         [
-            new Words(
-                string.Create(CultureInfo.InvariantCulture, $"{lot.Name}: {Loadings(film, lot)}, yield in film {lot.FilmYieldShare:0.000}"),
-                new(66, top - 8), TextAnchor.Start, 10.5, TextWeight.SemiBold, palette.Ink),
+            new Words(InterFont.Fitted(heading, 10.5, TextWeight.SemiBold, Right - Left), new(Left, top - 10), TextAnchor.Start, 10.5, TextWeight.SemiBold, palette.Ink),
             .. plot.Marks,
         ];
+
+        void Label(string text, Spot at, (double X, double Y) prefer) =>
+            plot.Over(plot.Labels.Place(text, at, 9.5, palette.Ink, palette.Ground, 8, prefer));
     }
 
-    private static void Area(Plot plot, ReadOnlySpan<double> samples, double peak, double limit, string colour)
+    private static double Relative(Spectrum<PhotonPerNm> light, int nm, double limit) => light[nm] / light.Peak * limit * 0.92;
+
+    private static void Area(Plot plot, Spectrum<PhotonPerNm> light, string colour)
     {
-        var corners = new List<Spot> { plot.At(FromNm, 0) };
-        for (int nm = FromNm; nm <= ToNm; nm++)
-            corners.Add(plot.At(nm, samples[WavelengthGrid.IndexOf(nm)] / peak * limit * 0.95));
-        corners.Add(plot.At(ToNm, 0));
-        plot.Inside(new Shape(corners, Closed: true, colour, 0.1, null));
+        var (fromNm, toNm) = ((int)plot.X.From, (int)plot.X.To);
+        plot.Inside(new Shape(
+            [plot.At(fromNm, 0), .. Enumerable.Range(fromNm, toNm - fromNm + 1).Select(nm => plot.At(nm, Relative(light, nm, plot.Y.To))), plot.At(toNm, 0)],
+            Closed: true, colour, 0.1, null));
     }
 
-    // Along the normal, this lot alone, all layers.
-    private static double Absorptance(Film film, DotLot lot, int nm)
-    {
-        int index = WavelengthGrid.IndexOf(nm);
-        double depth = film.Layers.Sum(layer => layer.Dots.Where(dots => dots.Lot.Name == lot.Name).Sum(dots => dots.AbsorptionPerMm(index)) * layer.ThicknessMm);
-        return 1 - Math.Exp(-depth);
-    }
+    // Decadic, along the normal, this lot alone, all layers.
+    private static double OpticalDensity(Film film, DotLot lot, int nm) => film.Layers.Sum(layer =>
+        layer.Dots.Where(dots => dots.Lot.Name == lot.Name).Sum(dots => dots.AbsorptionPerMm(WavelengthGrid.IndexOf(nm))) * layer.ThicknessMm) / Math.Log(10);
 
-    private static string Loadings(Film film, DotLot lot) => string.Join(", ", film.Layers
-        .SelectMany(layer => layer.Dots.Where(dots => dots.Lot.Name == lot.Name).Select(dots => string.Create(
-            CultureInfo.InvariantCulture, $"{dots.LoadingMgPerMl:0.###} mg/mL in {layer.Name}"))));
+    private static IEnumerable<int> LayersWith(Film film, DotLot lot) =>
+        Enumerable.Range(0, film.Layers.Count).Where(i => film.Layers[i].Dots.Any(dots => dots.Lot.Name == lot.Name));
+
+    private static string LoadingText(Film film, DotLot lot) => string.Join(", ", LayersWith(film, lot).Select(i => string.Create(
+        CultureInfo.InvariantCulture,
+        $"{film.Layers[i].Dots.First(dots => dots.Lot.Name == lot.Name).LoadingMgPerMl:0.###}\u2009mg/mL in {ChartNames.OfLayer(film, i)}")));
 }

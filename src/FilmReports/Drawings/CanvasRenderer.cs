@@ -11,7 +11,7 @@ internal static class CanvasRenderer
     /// <param name="pixelsPerPoint">Resolution.</param>
     public static byte[] Png(Drawing drawing, string ground, double pixelsPerPoint = 2)
     {
-        var size = new SKImageInfo((int)Math.Ceiling(drawing.Width * pixelsPerPoint), (int)Math.Ceiling(drawing.Height * pixelsPerPoint));
+        var size = new SKImageInfo((int)Math.Ceiling(drawing.Width * pixelsPerPoint), (int)Math.Ceiling(drawing.Height * pixelsPerPoint), SKColorType.Rgba8888, SKAlphaType.Opaque);
         using var surface = SKSurface.Create(size);
         surface.Canvas.Clear(SKColor.Parse(ground));
         surface.Canvas.Scale((float)pixelsPerPoint);
@@ -44,6 +44,9 @@ internal static class CanvasRenderer
                 case Words words:
                     Write(canvas, words);
                     break;
+                case Tiles tiles:
+                    Fill(canvas, tiles);
+                    break;
                 case Window window:
                     canvas.Save();
                     using (var outline = PathOf(window.Outline, closed: true))
@@ -55,6 +58,17 @@ internal static class CanvasRenderer
                     throw new NotSupportedException(mark.GetType().Name);
             }
         }
+    }
+
+    private static void Fill(SKCanvas canvas, Tiles tiles)
+    {
+        using var builder = new SKPathBuilder();
+        foreach (var box in tiles.Boxes)
+            builder.AddRect(new SKRect((float)box.Left, (float)box.Top, (float)box.Right, (float)box.Bottom));
+        using var path = builder.Detach();
+        // Smoothed edges of neighbours would let the paper shine through.
+        using var paint = new SKPaint { Color = Colour(tiles.Fill, 1), IsAntialias = false };
+        canvas.DrawPath(path, paint);
     }
 
     private static SKPath PathOf(IReadOnlyList<Spot> spots, bool closed)

@@ -38,6 +38,11 @@ internal sealed record Disc(Spot Centre, double Radius, string? Fill, Stroke? St
 internal sealed record Words(
     string Text, Spot At, TextAnchor Anchor, double Size, TextWeight Weight, string Colour, double TurnDeg = 0, string? Halo = null) : Mark;
 
+/// <summary>Upright rectangles of one colour that touch without seams: a ground, not data.</summary>
+/// <param name="Fill">Colour as #rrggbb.</param>
+/// <param name="Boxes">The rectangles.</param>
+internal sealed record Tiles(string Fill, IReadOnlyList<Box> Boxes) : Mark;
+
 /// <summary>Marks that show only inside an outline.</summary>
 internal sealed record Window(IReadOnlyList<Spot> Outline, IReadOnlyList<Mark> Marks) : Mark;
 

@@ -1,3 +1,5 @@
+using System.Buffers;
+using System.Text;
 using SkiaSharp;
 
 namespace FilmReports.Drawings;
@@ -26,15 +28,48 @@ internal static class InterFont
         return font.MeasureText(text);
     }
 
+    /// <summary>Whether every character can be drawn.</summary>
+    public static bool CanWrite(string text, TextWeight weight)
+    {
+        using var font = Of(1, weight);
+        return Missing(text, font) is null;
+    }
+
+    /// <summary>The text, or as much of its beginning as has room, with an ellipsis.</summary>
+    /// <param name="text">Any text.</param>
+    /// <param name="size">Points.</param>
+    /// <param name="weight">Weight.</param>
+    /// <param name="room">Greatest width, points.</param>
+    public static string Fitted(string text, double size, TextWeight weight, double room)
+    {
+        if (WidthOf(text, size, weight) <= room)
+            return text;
+        int length = text.Length;
+        do
+            length -= char.IsLowSurrogate(text[length - 1]) ? 2 : 1;
+        while (length > 0 && WidthOf($"{text[..length].TrimEnd()}…", size, weight) > room);
+        return $"{text[..length].TrimEnd()}…";
+    }
+
     /// <summary>Throws where a character cannot be drawn.</summary>
     public static void RequireGlyphs(string text, SKFont font)
     {
-        for (int i = 0; i < text.Length; i += char.IsSurrogatePair(text, i) ? 2 : 1)
+        if (Missing(text, font) is { } character)
+            throw new ArgumentException($"The font has no {character}, needed by '{text}'.", nameof(text));
+    }
+
+    private static string? Missing(string text, SKFont font)
+    {
+        int i = 0;
+        while (i < text.Length)
         {
-            int character = char.ConvertToUtf32(text, i);
-            if (!font.ContainsGlyph(character))
-                throw new ArgumentException($"The font has no U+{character:X4}, needed by '{text}'.", nameof(text));
+            // Half a surrogate pair is no character, and no font has it.
+            if (Rune.DecodeFromUtf16(text.AsSpan(i), out var rune, out int length) != OperationStatus.Done || !font.ContainsGlyph(rune.Value))
+                return $"U+{(int)text[i]:X4}";
+            i += length;
         }
+
+        return null;
     }
 
     private static SKTypeface TypefaceOf(TextWeight weight) => weight == TextWeight.Regular ? Regular.Value : SemiBold.Value;

@@ -3,8 +3,14 @@ namespace FilmReports.Drawings;
 /// <summary>Puts labels where they cover neither each other nor what must stay visible, and inside the drawing.</summary>
 internal sealed class LabelPlacer(Box area)
 {
+    // Beyond any drawing: a label is given up only where the whole area is full.
+    private const double Farthest = 1000;
+
     private static readonly (double X, double Y)[] Directions =
-        [(1, 0), (1, -1), (-1, 0), (0, -1), (0, 1), (-1, -1), (1, 1), (-1, 1)];
+    [
+        (1, 0), (1, -1), (-1, 0), (0, -1), (0, 1), (-1, -1), (1, 1), (-1, 1),
+        (2, -1), (2, 1), (-2, -1), (-2, 1), (1, -2), (1, 2), (-1, -2), (-1, 2),
+    ];
 
     private readonly List<Box> _taken = [];
 
@@ -13,6 +19,21 @@ internal sealed class LabelPlacer(Box area)
 
     /// <summary>Keeps labels off a place.</summary>
     public void KeepOff(Box box) => _taken.Add(box);
+
+    /// <summary>Keeps labels off a line, however steep.</summary>
+    public void KeepOffLine(IReadOnlyList<Spot> line)
+    {
+        const double Pitch = 5, Half = 2.5;
+        double since = Pitch;
+        for (int i = 1; i < line.Count; i++)
+        {
+            double dx = line[i].X - line[i - 1].X, dy = line[i].Y - line[i - 1].Y, length = Math.Sqrt((dx * dx) + (dy * dy));
+            double at = Pitch - since;
+            for (; at < length; at += Pitch)
+                KeepOff(Box.About(new(line[i - 1].X + (dx * at / length), line[i - 1].Y + (dy * at / length)), Half));
+            since = length - at + Pitch;
+        }
+    }
 
     /// <summary>A label as near to its point as there is room, starting in the preferred direction.</summary>
     /// <param name="text">What it says.</param>
@@ -28,7 +49,7 @@ internal sealed class LabelPlacer(Box area)
         string text, Spot of, double size, string colour, string? halo, double gap = 6, (double X, double Y)? prefer = null, TextWeight weight = TextWeight.Regular)
     {
         double width = InterFont.WidthOf(text, size, weight), height = size;
-        for (double reach = gap; reach < 140; reach += 4)
+        for (double reach = gap; reach < Farthest; reach += 4)
         {
             foreach (var (dx, dy) in prefer is { } p ? Directions.Prepend(p) : Directions)
             {

@@ -42,38 +42,45 @@ internal sealed class Plot
         Field.Left + ((x - X.From) / (X.To - X.From) * (Field.Right - Field.Left)),
         Field.Bottom - ((y - Y.From) / (Y.To - Y.From) * (Field.Bottom - Field.Top)));
 
+    /// <summary>What a point of the drawing stands for on the axes.</summary>
+    public (double X, double Y) ValueAt(Spot spot) => (
+        X.From + ((spot.X - Field.Left) / (Field.Right - Field.Left) * (X.To - X.From)),
+        Y.From + ((Field.Bottom - spot.Y) / (Field.Bottom - Field.Top) * (Y.To - Y.From)));
+
     /// <summary>Adds marks that are cut off at the field.</summary>
     public void Inside(params IEnumerable<Mark> marks) => _inside.AddRange(marks);
 
     /// <summary>Adds marks that may stand anywhere.</summary>
     public void Over(params IEnumerable<Mark> marks) => _marks.AddRange(marks);
 
-    /// <summary>A line through points of the axes.</summary>
-    public void Line(IEnumerable<(double X, double Y)> points, Stroke stroke) =>
-        Inside(new Shape([.. points.Select(p => At(p.X, p.Y))], Closed: false, null, 1, stroke));
+    /// <summary>A line through points of the axes, which labels keep off.</summary>
+    public void Line(IEnumerable<(double X, double Y)> points, Stroke stroke)
+    {
+        Spot[] spots = [.. points.Select(p => At(p.X, p.Y))];
+        Inside(new Shape(spots, Closed: false, null, 1, stroke));
+        Labels.KeepOffLine(spots);
+    }
 
     /// <summary>Hairline grid, tick labels and titles.</summary>
     /// <param name="stepX">Distance of ticks.</param>
     /// <param name="titleX">Title with unit.</param>
     /// <param name="stepY">Distance of ticks.</param>
     /// <param name="titleY">Title with unit.</param>
-    /// <param name="format">How ticks are written.</param>
-    /// <param name="formatY">How ticks of the upright axis are written; as the other unless given.</param>
-    public void Axes(double stepX, string titleX, double stepY, string titleY, string format, string? formatY = null)
+    public void Axes(double stepX, string titleX, double stepY, string titleY)
     {
         var hair = new Stroke(_palette.Hairline, 0.7);
         foreach (double x in Ticks(X, stepX))
         {
             var foot = At(x, Y.From);
             Inside(new Shape([foot, At(x, Y.To)], Closed: false, null, 1, hair));
-            Over(new Words(Number(x, format), new(foot.X, Field.Bottom + 13), TextAnchor.Middle, TickSize, TextWeight.Regular, _palette.Faint));
+            Over(new Words(Number(x, stepX), new(foot.X, Field.Bottom + 13), TextAnchor.Middle, TickSize, TextWeight.Regular, _palette.Faint));
         }
 
         double widest = 0;
         foreach (double y in Ticks(Y, stepY))
         {
             var foot = At(X.From, y);
-            string text = Number(y, formatY ?? format);
+            string text = Number(y, stepY);
             widest = Math.Max(widest, InterFont.WidthOf(text, TickSize, TextWeight.Regular));
             Inside(new Shape([foot, At(X.To, y)], Closed: false, null, 1, hair));
             Over(new Words(text, new(Field.Left - 6, foot.Y + 3.4), TextAnchor.End, TickSize, TextWeight.Regular, _palette.Faint));
@@ -100,6 +107,10 @@ internal sealed class Plot
             yield return i == 0 ? 0 : i * step; // Not the negative zero that the ceiling of a small negative number is.
     }
 
-    private static string Number(double value, string format) =>
-        value.ToString(format, CultureInfo.InvariantCulture).Replace('-', '\u2212');
+    // As many decimals as tell one tick from the next.
+    private static string Number(double value, double step)
+    {
+        int decimals = Math.Max(0, (int)Math.Ceiling(-Math.Log10(step) - 1e-9));
+        return value.ToString("F" + decimals.ToString(CultureInfo.InvariantCulture), CultureInfo.InvariantCulture).Replace('-', '\u2212');
+    }
 }

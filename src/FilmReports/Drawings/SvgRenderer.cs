@@ -70,6 +70,13 @@ internal static class SvgRenderer
                 case Words words:
                     Write(svg, words);
                     break;
+                case Tiles tiles:
+                    svg.WriteStartElement("path");
+                    svg.WriteAttributeString("fill", tiles.Fill);
+                    svg.WriteAttributeString("shape-rendering", "crispEdges");
+                    svg.WriteAttributeString("d", string.Concat(tiles.Boxes.Select(b => $"M{N(b.Left)} {N(b.Top)}H{N(b.Right)}V{N(b.Bottom)}H{N(b.Left)}z")));
+                    svg.WriteEndElement();
+                    break;
                 case Window window:
                     string id = $"{name}-window-{++windows}";
                     svg.WriteStartElement("clipPath");
@@ -111,6 +118,9 @@ internal static class SvgRenderer
         svg.WriteAttributeString("x", N(words.At.X));
         svg.WriteAttributeString("y", N(words.At.Y));
         svg.WriteAttributeString("font-size", N(words.Size));
+        // A viewer without Inter takes another font: held to Inter's width, no label grows into its neighbour.
+        svg.WriteAttributeString("textLength", N(InterFont.WidthOf(words.Text, words.Size, words.Weight)));
+        svg.WriteAttributeString("lengthAdjust", "spacingAndGlyphs");
         if (words.Weight == TextWeight.SemiBold)
             svg.WriteAttributeString("font-weight", "600");
         if (words.Anchor != TextAnchor.Start)
@@ -131,5 +141,6 @@ internal static class SvgRenderer
         svg.WriteEndElement();
     }
 
-    private static string N(double number) => Math.Round(number, 2).ToString("0.##", CultureInfo.InvariantCulture);
+    // Adding 0 turns the negative zero into the plain one.
+    private static string N(double number) => (Math.Round(number, 2) + 0.0).ToString("0.##", CultureInfo.InvariantCulture);
 }

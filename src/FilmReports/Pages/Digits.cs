@@ -1,22 +1,33 @@
 using System.Globalization;
+using FilmOptics;
 
 namespace FilmReports.Pages;
 
-/// <summary>Numbers as people read them: true minus, an en dash for what is not known.</summary>
+/// <summary>Numbers as people read them: true minus, thin space before a unit, an en dash for what is not known.</summary>
 internal static class Digits
 {
     public const string Unknown = "–";
 
     /// <summary>With a fixed number of decimals.</summary>
     public static string Fixed(double? value, int decimals) =>
-        value is { } v ? Signed(v.ToString("F" + decimals.ToString(CultureInfo.InvariantCulture), CultureInfo.InvariantCulture)) : Unknown;
+        value is { } v ? WithMinus(v.ToString("F" + decimals.ToString(CultureInfo.InvariantCulture), CultureInfo.InvariantCulture)) : Unknown;
+
+    /// <summary>With a fixed number of decimals and a sign always.</summary>
+    public static string Signed(double? value, int decimals) => value is { } v && !double.IsNegative(v) ? $"+{Fixed(v, decimals)}" : Fixed(value, decimals);
 
     /// <summary>With up to so many significant digits.</summary>
     public static string Significant(double? value, int digits) =>
-        value is { } v ? Signed(v.ToString("G" + digits.ToString(CultureInfo.InvariantCulture), CultureInfo.InvariantCulture)) : Unknown;
+        value is { } v ? WithMinus(v.ToString("G" + digits.ToString(CultureInfo.InvariantCulture), CultureInfo.InvariantCulture)) : Unknown;
 
     /// <summary>A share as a percentage.</summary>
-    public static string Percent(double? share, int decimals = 2) => share is { } s ? $"{Fixed(s * 100, decimals)}\u2009%" : Unknown;
+    public static string Percent(double? share, int decimals = 1) => share is { } s ? $"{Fixed(s * 100, decimals)}\u2009%" : Unknown;
 
-    private static string Signed(string text) => text.Replace('-', '\u2212');
+    /// <summary>Decimals of a share that a result's error supports: the last one is of the error's size. 4 for a model that states none.</summary>
+    public static int ShareDecimals(FilmOutput output)
+    {
+        double? error = output.Tracing is { } tracing ? tracing.LargestBudgetErrorShare : output.Accuracy?.EstimateShare;
+        return error is > 0 and < 1 ? Math.Clamp((int)Math.Ceiling(-Math.Log10(error.Value)), 2, 5) : 4;
+    }
+
+    private static string WithMinus(string text) => text.Replace('-', '\u2212');
 }

@@ -47,16 +47,23 @@ internal sealed class PageWriter : IDisposable
     }
 
     /// <summary>A table; the first column holds what a row is about.</summary>
-    public void Table(string caption, IReadOnlyList<string> head, IEnumerable<IReadOnlyList<string>> rows)
+    /// <param name="caption">What the table holds.</param>
+    /// <param name="head">Heads of the columns, units with them.</param>
+    /// <param name="rows">As many cells as heads.</param>
+    /// <param name="kind">Figures align to the right, words to the left; a last row may be the sum.</param>
+    public void Table(string caption, IReadOnlyList<string> head, IEnumerable<IReadOnlyList<string>> rows, TableKind kind = TableKind.Figures)
     {
         _xml.WriteStartElement("table");
+        if (kind == TableKind.Words)
+            _xml.WriteAttributeString("class", "words");
         _xml.WriteElementString("caption", caption);
         _xml.WriteStartElement("thead");
         Row("col", head, firstOnly: false);
         _xml.WriteEndElement();
         _xml.WriteStartElement("tbody");
-        foreach (var row in rows)
-            Row("row", row, firstOnly: true);
+        IReadOnlyList<string>[] all = [.. rows];
+        for (int i = 0; i < all.Length; i++)
+            Row("row", all[i], firstOnly: true, isSum: kind == TableKind.WithSum && i == all.Length - 1);
         _xml.WriteEndElement();
         _xml.WriteEndElement();
     }
@@ -106,9 +113,11 @@ internal sealed class PageWriter : IDisposable
     /// <inheritdoc/>
     public void Dispose() => _xml.Dispose();
 
-    private void Row(string scope, IReadOnlyList<string> cells, bool firstOnly)
+    private void Row(string scope, IReadOnlyList<string> cells, bool firstOnly, bool isSum = false)
     {
         _xml.WriteStartElement("tr");
+        if (isSum)
+            _xml.WriteAttributeString("class", "sum");
         for (int i = 0; i < cells.Count; i++)
         {
             bool head = !firstOnly || i == 0;
@@ -116,9 +125,23 @@ internal sealed class PageWriter : IDisposable
             if (head)
                 _xml.WriteAttributeString("scope", scope);
             _xml.WriteString(cells[i]);
-            _xml.WriteEndElement();
+            // A browser takes a cell closed in its own tag for an open one.
+            _xml.WriteFullEndElement();
         }
 
         _xml.WriteEndElement();
     }
+}
+
+/// <summary>What the cells of a table hold.</summary>
+internal enum TableKind
+{
+    /// <summary>Figures.</summary>
+    Figures,
+
+    /// <summary>Figures, and their sum in the last row.</summary>
+    WithSum,
+
+    /// <summary>Words.</summary>
+    Words,
 }

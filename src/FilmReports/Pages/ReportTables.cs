@@ -1,45 +1,53 @@
 using Colorimetry;
 using FilmOptics;
+using FilmReports.Safety;
 
 namespace FilmReports.Pages;
 
-/// <summary>Rows of the report's tables.</summary>
+/// <summary>Rows of the tables of results.</summary>
 internal static class ReportTables
 {
     public static IEnumerable<IReadOnlyList<string>> Colours(FilmAppraisal appraisal)
     {
-        yield return White("film white", appraisal.FilmWhite);
-        if (appraisal.Panel is not { } panel)
-            yield break;
-        yield return White("panel white", panel.White);
-        yield return Primary("panel red", panel.Red);
-        yield return Primary("panel green", panel.Green);
-        yield return Primary("panel blue", panel.Blue);
+        int decimals = Math.Min(4, Digits.ShareDecimals(appraisal.Output));
+        if (appraisal.Panel is { } panel)
+        {
+            yield return White("panel white", panel.White, decimals);
+            yield return [.. Coordinates("panel red", panel.Red, decimals), "", ""];
+            yield return [.. Coordinates("panel green", panel.Green, decimals), "", ""];
+            yield return [.. Coordinates("panel blue", panel.Blue, decimals), "", ""];
+        }
+
+        yield return White("film white", appraisal.FilmWhite, decimals);
     }
 
-    public static IEnumerable<IReadOnlyList<string>> Budget(FilmCase filmCase, PhotonBudget budget)
+    public static IEnumerable<IReadOnlyList<string>> Gamut(IEnumerable<GamutComparison> gamut) => gamut.Select(g => (IReadOnlyList<string>)
+        [g.Name, Digits.Percent(g.CoverageXy), Digits.Percent(g.CoverageUv), Digits.Percent(g.AreaRatioXy), Digits.Percent(g.AreaRatioUv)]);
+
+    /// <summary>Every line of the budget and their sum, with standard errors where the model has them.</summary>
+    public static IEnumerable<IReadOnlyList<string>> Budget(FilmCase filmCase, FilmOutput output)
     {
-        yield return ["leaves above unconverted", Digits.Fixed(budget.Unconverted, 5)];
-        yield return ["leaves above converted", Digits.Fixed(budget.Converted, 5)];
-        yield return ["lost below: absorbed by the reflector", Digits.Fixed(budget.LostBelow, 5)];
-        yield return ["lost above: absorbed by the sheets", Digits.Fixed(budget.LostAbove, 5)];
-        yield return ["lost in host", Digits.Fixed(budget.LostInHost, 5)];
-        yield return ["lost at edges", Digits.Fixed(budget.LostAtEdges, 5)];
-        for (int i = 0; i < budget.LostInLots.Count; i++)
-            yield return [$"not emitted by {filmCase.Film.Lots[i].Name}", Digits.Fixed(budget.LostInLots[i], 5)];
-        yield return ["sum", Digits.Fixed(budget.Sum, 5)];
+        int decimals = Digits.ShareDecimals(output);
+        var errors = output.Tracing is { } tracing ? Lines(filmCase.Film, tracing.StandardError).Select(line => (double?)line.Share).Append(null) : null;
+        var lines = Lines(filmCase.Film, output.Budget).Append(("sum", output.Budget.Sum));
+        return errors is null
+            ? lines.Select(line => (IReadOnlyList<string>)[line.Item1, Digits.Fixed(line.Item2, decimals)])
+            : lines.Zip(errors, (line, error) => (IReadOnlyList<string>)[line.Item1, Digits.Fixed(line.Item2, decimals), error is { } e ? Digits.Significant(e, 2) : ""]);
     }
 
-    public static IEnumerable<IReadOnlyList<string>> Lots(FilmCase filmCase, FilmAppraisal appraisal)
+    public static IEnumerable<IReadOnlyList<string>> Bands(FilmCase filmCase, FilmAppraisal appraisal)
     {
         var budget = appraisal.Output.Budget;
-        for (int i = 0; i < filmCase.Film.Lots.Count; i++)
+        int decimals = Digits.ShareDecimals(appraisal.Output);
+        for (int i = 0; i < appraisal.Bands.Count; i++)
         {
-            var band = appraisal.Bands[i + 1];
+            var band = appraisal.Bands[i];
             yield return
             [
-                band.Name, Digits.Fixed(budget.SourceAbsorbedBy[i], 4), Digits.Fixed(budget.Excitations[i], 4),
-                Digits.Fixed(band.Photons, 4), Digits.Fixed(band.PeakNm, 1), Digits.Fixed(band.FwhmNm, 1),
+                band.Name,
+                i == 0 ? "" : Digits.Fixed(budget.SourceAbsorbedBy[i - 1], decimals),
+                i == 0 ? "" : Digits.Fixed(budget.Excitations[i - 1], decimals),
+                Digits.Fixed(band.Photons, decimals), Digits.Fixed(band.PeakNm, 1), Digits.Fixed(band.FwhmNm, 1),
             ];
         }
     }
@@ -47,11 +55,13 @@ internal static class ReportTables
     public static IEnumerable<IReadOnlyList<string>> Efficiencies(FilmAppraisal appraisal)
     {
         var efficiency = appraisal.Efficiency;
-        yield return ["blue leakage, photons", Digits.Percent(efficiency.BlueLeakagePhotonShare), "source photons that leave above unconverted"];
-        yield return ["blue leakage, power", Digits.Percent(efficiency.BlueLeakagePowerShare), "source power that leaves above unconverted"];
-        yield return ["external photon efficiency", Digits.Percent(efficiency.ExternalPhotonShare), "converted photons leaving above per source photon"];
-        yield return ["down-conversion efficiency", Digits.Percent(efficiency.DownConversionShare), "converted photons leaving above per source photon absorbed by dots"];
-        yield return ["energy efficiency", Digits.Percent(efficiency.EnergyShare), "power leaving above per source power"];
+        int decimals = Math.Clamp(Digits.ShareDecimals(appraisal.Output) - 2, 0, 2);
+        yield return ["blue leakage, photons", Digits.Percent(efficiency.BlueLeakagePhotonShare, decimals), "source photons that leave above unconverted"];
+        yield return ["blue leakage, power", Digits.Percent(efficiency.BlueLeakagePowerShare, decimals), "source power that leaves above unconverted"];
+        yield return ["source absorption by dots", Digits.Percent(appraisal.Output.Budget.SourceAbsorbedBy.Sum(), decimals), "source photons absorbed by any dot"];
+        yield return ["external photon efficiency", Digits.Percent(efficiency.ExternalPhotonShare, decimals), "converted photons leaving above per source photon"];
+        yield return ["down-conversion efficiency", Digits.Percent(efficiency.DownConversionShare, decimals), "converted photons leaving above per source photon absorbed by dots"];
+        yield return ["energy efficiency", Digits.Percent(efficiency.EnergyShare, decimals), "power leaving above per source power"];
     }
 
     public static IEnumerable<IReadOnlyList<string>> Recipe(Film film)
@@ -76,46 +86,34 @@ internal static class ReportTables
         film.Layers.Zip(appraisal.Layers, (layer, figures) => (IReadOnlyList<string>)
         [
             figures.Name, Digits.Fixed(figures.ThicknessUm, 1), Digits.Fixed(figures.CoatWeightGPerM2, 1),
-            Digits.Fixed(figures.OpticalDensity, 3), Digits.Fixed(layer.RefractiveIndex, 2),
+            Digits.Fixed(figures.OpticalDensity, 3), Digits.Fixed(layer.RefractiveIndex, 3),
         ]);
 
-    public static IEnumerable<IReadOnlyList<string>> Input(FilmCase filmCase)
-    {
-        var (film, source) = (filmCase.Film, EmissionBands.Of("source", filmCase.Film.Backlight.Photons));
-        yield return ["source peak / nm", Digits.Fixed(source.PeakNm, 1)];
-        yield return ["source FWHM / nm", Digits.Fixed(source.FwhmNm, 1)];
-        yield return ["incidence", film.Backlight.Incidence.Kind.ToString().ToLowerInvariant()];
-        yield return ["reflectance below", Range(film.Cavity.BelowReflectance)];
-        yield return ["reflectance above", film.Cavity.AboveReflectanceByAngle is { } byAngle ? $"by angle: {byAngle.Source}" : Range(film.Cavity.AboveReflectance)];
-        yield return ["absorptance above", Range(film.Cavity.AboveAbsorptance)];
-        yield return ["source that misses the film", Digits.Percent(film.Cavity.BypassShare)];
-        if (film.Sheet is { } sheet)
-            yield return ["sheet / mm", sheet.HeightMm is { } height ? $"{Digits.Significant(sheet.WidthMm, 6)} × {Digits.Significant(height, 6)}" : Digits.Significant(sheet.WidthMm, 6)];
-        if (filmCase.Panel is { } panel)
-            yield return ["pixel area, red, green, blue", $"{Digits.Fixed(panel.RedAreaShare, 3)}, {Digits.Fixed(panel.GreenAreaShare, 3)}, {Digits.Fixed(panel.BlueAreaShare, 3)}"];
-        if (filmCase.Target is { } target)
-        {
-            yield return ["target white", $"{Digits.Fixed(target.WhiteX, 4)}, {Digits.Fixed(target.WhiteY, 4)} at the {(target.Place == TargetPlace.Panel ? "panel" : "film")}"];
-            yield return ["tolerance in xy", Digits.Significant(target.ToleranceXy, 3)];
-        }
-    }
+    public static IEnumerable<IReadOnlyList<string>> BlueLights(FilmCase filmCase, FilmAppraisal appraisal) =>
+        BlueLight.Of(filmCase, appraisal).Select(light => (IReadOnlyList<string>)
+            [light.Light, Digits.Percent(light.ShortBlueShare), Digits.Fixed(light.HazardWattPerLumen * 1000, 2)]);
 
-    public static IEnumerable<IReadOnlyList<string>> LotInputs(Film film) => film.Lots.Select(lot => (IReadOnlyList<string>)
+    public static IEnumerable<IReadOnlyList<string>> Metals(Film film) => RestrictedSubstances.Of(film).Select(layer => (IReadOnlyList<string>)
     [
-        lot.Name, Digits.Fixed(lot.QuantumYieldShare, 3), Digits.Fixed(lot.FilmYieldShare, 3), Digits.Fixed(lot.FilmExtinctionFactor, 3), Digits.Fixed(lot.FilmEmissionShiftNm, 1),
+        layer.LayerName,
+        Digits.Fixed(layer.CadmiumMgPerKg, 0), Digits.Fixed(layer.CadmiumUgPerMm2, 4),
+        Digits.Fixed(layer.LeadMgPerKg, 0), Digits.Fixed(layer.LeadUgPerMm2, 4),
     ]);
 
-    private static IReadOnlyList<string> White(string name, WhitePoint white) =>
-        [.. Primary(name, white.Chromaticity), Digits.Fixed(white.CctKelvin, 0), Digits.Fixed(white.Duv, 4)];
+    private static IEnumerable<(string Name, double Share)> Lines(Film film, PhotonBudget budget) =>
+    [
+        ("leaves above unconverted", budget.Unconverted),
+        ("leaves above converted", budget.Converted),
+        ("lost below: absorbed by the reflector", budget.LostBelow),
+        ("lost above: absorbed by the sheets", budget.LostAbove),
+        ("lost in the host", budget.LostInHost),
+        ("lost at the edges", budget.LostAtEdges),
+        .. film.Lots.Select((lot, i) => ($"lost in {lot.Name}, without radiation", budget.LostInLots[i])),
+    ];
 
-    private static IReadOnlyList<string> Primary(string name, Chromaticity c) =>
-        [name, Digits.Fixed(c.X, 4), Digits.Fixed(c.Y, 4), Digits.Fixed(c.UPrime, 4), Digits.Fixed(c.VPrime, 4)];
+    private static IReadOnlyList<string> White(string name, WhitePoint white, int decimals) =>
+        [.. Coordinates(name, white.Chromaticity, decimals), Digits.Fixed(white.CctKelvin, 0), Digits.Signed(white.Duv, 4)];
 
-    private static string Range(Spectrum<Fraction> share)
-    {
-        double low = share.Samples[0], high = low;
-        foreach (double value in share.Samples)
-            (low, high) = (Math.Min(low, value), Math.Max(high, value));
-        return high - low < 5e-4 ? Digits.Fixed(high, 3) : $"{Digits.Fixed(low, 3)}–{Digits.Fixed(high, 3)}";
-    }
+    private static IEnumerable<string> Coordinates(string name, Chromaticity c, int decimals) =>
+        [name, Digits.Fixed(c.X, decimals), Digits.Fixed(c.Y, decimals), Digits.Fixed(c.UPrime, decimals), Digits.Fixed(c.VPrime, decimals)];
 }

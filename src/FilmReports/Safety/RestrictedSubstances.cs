@@ -1,3 +1,4 @@
+using System.Globalization;
 using FilmOptics;
 
 namespace FilmReports.Safety;
@@ -19,6 +20,10 @@ public sealed record RestrictedSubstances(
 
     /// <summary>Figure of the former exemption 39(a) for downshifting dots in displays, µg/mm² of screen; expired on 21 November 2025.</summary>
     public const double FormerExemptionUgPerMm2 = 0.2;
+
+    /// <summary>The limits in words.</summary>
+    internal static string LimitText { get; } = string.Create(
+        CultureInfo.InvariantCulture, $"2011/65/EU allows {CadmiumLimitMgPerKg}\u2009mg/kg cadmium and {LeadLimitMgPerKg}\u2009mg/kg lead in a homogeneous material.");
 
     /// <summary>One entry for each layer that holds dots.</summary>
     public static IReadOnlyList<RestrictedSubstances> Of(Film film)
