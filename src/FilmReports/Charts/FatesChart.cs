@@ -10,7 +10,7 @@ internal static class FatesChart
     /// <summary>Losses below this share are drawn together.</summary>
     internal const double PooledShare = 0.005;
 
-    private const double LossLabelRoom = 120, FullWidth = 190, FirstTop = 60, Gap = 14, MinPitch = 26, Left = 40, Right = 470;
+    private const double LossLabelRoom = 120, FullWidth = 190, FirstTop = 60, Gap = 14, MinPitch = 26, Left = 40, LeastRight = 470, NameRoom = 134;
 
     /// <summary>A stream of the picture.</summary>
     /// <param name="Name">What becomes of the photons.</param>
@@ -20,6 +20,8 @@ internal static class FatesChart
     /// <param name="Mark">Sign of the light; null for a loss.</param>
     internal sealed record Stream(string Name, double Share, string Colour, bool LeavesAbove, LightMark? Mark);
 
+    private sealed record LossPlace(Stream Stream, double X, double Width, string[] Lines);
+
     public static Drawing Of(FilmCase filmCase, FilmAppraisal appraisal, Palette palette)
     {
         var streams = Streams(filmCase, appraisal, palette);
@@ -28,22 +30,25 @@ internal static class FatesChart
         double Width(Stream stream) => stream.Share / total * FullWidth;
         // Outputs fan upward from the lowest, which stays level, so that the losses below have the room to themselves.
         double lift = outputs.Take(outputs.Length - 1).Sum(s => Math.Max(Width(s), MinPitch) - Width(s) + Gap);
-        double top = FirstTop + lift, outWidth = outputs.Sum(Width);
+        double top = FirstTop + lift;
+        var places = PlacesOf(losses, Width);
+        // Light leaves to the right of where the last loss has turned down: no stream runs into its name.
+        double right = places.Aggregate(LeastRight, (most, place) => Math.Max(most, place.X + place.Width + 8)), pictureWidth = right + 26 + NameRoom + 10;
         var marks = new List<Mark>
         {
             new Words("Where each source photon goes", new(Left, 26), TextAnchor.Start, 13, TextWeight.SemiBold, palette.Ink),
-            new Words(string.Create(CultureInfo.InvariantCulture, $"sum of all shares {appraisal.Output.Budget.Sum:0.000000}"), new(600, 26), TextAnchor.End, 9.5, TextWeight.Regular, palette.Faint),
+            new Words(string.Create(CultureInfo.InvariantCulture, $"sum of all shares {appraisal.Output.Budget.Sum:0.000000}"), new(pictureWidth - 40, 26), TextAnchor.End, 9.5, TextWeight.Regular, palette.Faint),
             new Words("1 source photon", new(Left, top + FullWidth + 16), TextAnchor.Start, 10, TextWeight.Regular, palette.Ink),
         };
         double y = top, outY = FirstTop;
         foreach (var stream in outputs)
         {
             double width = Width(stream);
-            marks.Add(Ribbon(y, outY, width, stream.Colour));
-            var label = new Spot(Right + 26, outY + Math.Max(width / 2, 4));
+            marks.Add(Ribbon(y, outY, width, right, stream.Colour));
+            var label = new Spot(right + 26, outY + Math.Max(width / 2, 4));
             if (stream.Mark is { } mark)
-                marks.Add(LightMarks.Sign(mark, new(Right + 12, label.Y), 4, stream.Colour));
-            marks.Add(new Words(InterFont.Fitted(stream.Name, 10, TextWeight.SemiBold, 640 - label.X - 10), new(label.X, label.Y - 1), TextAnchor.Start, 10, TextWeight.SemiBold, palette.Ink));
+                marks.Add(LightMarks.Sign(mark, new(right + 12, label.Y), 4, stream.Colour));
+            marks.Add(new Words(InterFont.Fitted(stream.Name, 10, TextWeight.SemiBold, NameRoom), new(label.X, label.Y - 1), TextAnchor.Start, 10, TextWeight.SemiBold, palette.Ink));
             marks.Add(new Words(Percent(stream.Share), new(label.X, label.Y + 11), TextAnchor.Start, 9.5, TextWeight.Regular, palette.Ink));
             y += width;
             outY += Math.Max(width, MinPitch) + Gap;
@@ -51,25 +56,16 @@ internal static class FatesChart
 
         // Losses bend downward, the lowest first so that no two cross.
         double bottom = Math.Max(top + FullWidth, outY - Gap) + 46;
-        double x = Left + 104;
-        double lossTop = top + outWidth;
-        double lossHeight = FullWidth - outWidth;
-        double labelEnd = 0;
-        for (int i = 0; i < losses.Length; i++)
+        double lossBottom = top + FullWidth;
+        foreach (var place in places)
         {
-            double width = Width(losses[i]);
-            string[] lines = [.. losses[i].Name.Split('|').Select(line => InterFont.Fitted(line, 9, TextWeight.Regular, LossLabelRoom))];
-            double labelWidth = lines.Max(line => InterFont.WidthOf(line, 9, TextWeight.Regular));
-            x = Math.Max(x, labelEnd + 10 + ((labelWidth - width) / 2));
-            double from = lossTop + lossHeight - width;
-            marks.Add(Downward(from, x, width, bottom, losses[i].Colour));
-            double labelX = x + (width / 2);
-            for (int line = 0; line < lines.Length; line++)
-                marks.Add(new Words(lines[line], new(labelX, bottom + 16 + (line * 11)), TextAnchor.Middle, 9, TextWeight.Regular, palette.Ink));
-            marks.Add(new Words(Percent(losses[i].Share), new(labelX, bottom + 16 + (lines.Length * 11)), TextAnchor.Middle, 9.5, TextWeight.SemiBold, palette.Ink));
-            lossHeight -= width;
-            labelEnd = labelX + (labelWidth / 2);
-            x += width + 22;
+            lossBottom -= place.Width;
+            marks.Add(Downward(lossBottom, place.X, place.Width, bottom, place.Stream.Colour));
+            double labelX = place.X + (place.Width / 2);
+            for (int line = 0; line < place.Lines.Length; line++)
+                marks.Add(new Words(place.Lines[line], new(labelX, bottom + 16 + (line * 11)), TextAnchor.Middle, 9, TextWeight.Regular, palette.Ink));
+            marks.Add(new Words(
+                Percent(place.Stream.Share), new(labelX, bottom + 16 + (place.Lines.Length * 11)), TextAnchor.Middle, 9.5, TextWeight.SemiBold, palette.Ink));
         }
 
         marks.Insert(3, new Shape([new(Left - 14, top), new(Left, top), new(Left, top + FullWidth), new(Left - 14, top + FullWidth), new(Left - 6, top + (FullWidth / 2))], Closed: true, palette.Source, 0.9, null));
@@ -77,7 +73,7 @@ internal static class FatesChart
             "photon-fates",
             "Where each source photon goes",
             string.Join(' ', streams.Select(s => $"{s.Name.Replace('|', ' ')}: {Percent(s.Share)}.")),
-            Math.Max(640, labelEnd + 20),
+            pictureWidth,
             bottom + 62,
             marks);
     }
@@ -113,7 +109,26 @@ internal static class FatesChart
         Stream Loss(string name, double share) => new(name, share, palette.Faint, false, null);
     }
 
-    private static Shape Ribbon(double fromY, double toY, double width, string colour)
+    // Where each loss turns down, far enough apart for their names.
+    private static List<LossPlace> PlacesOf(Stream[] losses, Func<Stream, double> widthOf)
+    {
+        var places = new List<LossPlace>();
+        double x = Left + 104, labelEnd = 0;
+        foreach (var loss in losses)
+        {
+            double width = widthOf(loss);
+            string[] lines = [.. loss.Name.Split('|').Select(line => InterFont.Fitted(line, 9, TextWeight.Regular, LossLabelRoom))];
+            double labelWidth = lines.Max(line => InterFont.WidthOf(line, 9, TextWeight.Regular));
+            x = Math.Max(x, labelEnd + 10 + ((labelWidth - width) / 2));
+            places.Add(new(loss, x, width, lines));
+            labelEnd = x + ((width + labelWidth) / 2);
+            x += width + 22;
+        }
+
+        return places;
+    }
+
+    private static Shape Ribbon(double fromY, double toY, double width, double right, string colour)
     {
         const int Steps = 24;
         var upper = new List<Spot>();
@@ -121,7 +136,7 @@ internal static class FatesChart
         for (int i = 0; i <= Steps; i++)
         {
             double t = i / (double)Steps, ease = t * t * (3 - (2 * t));
-            double x = Left + (t * (Right - Left)), y = fromY + ((toY - fromY) * ease);
+            double x = Left + (t * (right - Left)), y = fromY + ((toY - fromY) * ease);
             upper.Add(new(x, y));
             lower.Add(new(x, y + width));
         }

@@ -54,8 +54,10 @@ internal static class LotChart
         Label("emission", peak, (1, 0));
         Label("source", plot.At(sourceNm, Relative(film.Backlight.Photons, sourceNm, limit)), (1, 0));
         Label("absorption", plot.At(fromNm, density[0]), (1, -1));
-        string heading = string.Create(
-            CultureInfo.InvariantCulture, $"{ChartNames.OfLot(film, index)}: {LoadingText(film, lot)}, yield in film {lot.FilmYieldShare:0.000}");
+        // A long name gives way to the figures.
+        string figures = string.Create(CultureInfo.InvariantCulture, $": {LoadingText(film, lot)}, yield in film {lot.FilmYieldShare:0.000}");
+        double room = Math.Max(150, Right - Left - InterFont.WidthOf(figures, 10.5, TextWeight.SemiBold));
+        string heading = InterFont.Fitted(ChartNames.OfLot(film, index), 10.5, TextWeight.SemiBold, room) + figures;
         return
         [
             new Words(InterFont.Fitted(heading, 10.5, TextWeight.SemiBold, Right - Left), new(Left, top - 10), TextAnchor.Start, 10.5, TextWeight.SemiBold, palette.Ink),
@@ -85,5 +87,5 @@ internal static class LotChart
 
     private static string LoadingText(Film film, DotLot lot) => string.Join(", ", LayersWith(film, lot).Select(i => string.Create(
         CultureInfo.InvariantCulture,
-        $"{film.Layers[i].Dots.First(dots => dots.Lot.Name == lot.Name).LoadingMgPerMl:0.###}\u2009mg/mL in {ChartNames.OfLayer(film, i)}")));
+        $"{film.Layers[i].Dots.First(dots => dots.Lot.Name == lot.Name).LoadingMgPerMl:0.###}\u2009mg/mL in {InterFont.Fitted(ChartNames.OfLayer(film, i), 10.5, TextWeight.SemiBold, 100)}")));
 }

@@ -38,7 +38,7 @@ internal static class PageStyle
           main { max-width: none; padding: 0; }
           h1 { font-size: 16pt; }
           h2 { font-size: 12pt; break-after: avoid; }
-          figure, tr, dl, li { break-inside: avoid; }
+          figure, table, dl, li { break-inside: avoid; }
           caption { break-after: avoid; }
           figure { max-width: 150mm; }
         }

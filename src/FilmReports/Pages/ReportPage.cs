@@ -33,7 +33,7 @@ internal static class ReportPage
     }
 
     private static string Effort(FilmOutput output) =>
-        output.Tracing is { } tracing ? $", {Digits.Significant(tracing.Photons, 3)} photons traced, seed {tracing.Seed.ToString(System.Globalization.CultureInfo.InvariantCulture)}"
+        output.Tracing is { } tracing ? $", {Digits.Count(tracing.Photons)} photons traced, seed {tracing.Seed.ToString(System.Globalization.CultureInfo.InvariantCulture)}"
         : output.Accuracy is { } accuracy ? $", estimated error {Digits.Significant(accuracy.EstimateShare, 2)}"
         : "";
 

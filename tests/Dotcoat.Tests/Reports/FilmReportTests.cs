@@ -134,8 +134,18 @@ public sealed class FilmReportTests
         var rows = Table("traced", "Photon budget");
         Assert.All(rows, row => Assert.Matches(@"^\d\.\d{3}$", row[1]));
         Assert.All(rows.SkipLast(1), row => Assert.True(double.Parse(row[2], CultureInfo.InvariantCulture) < 0.004));
-        Assert.Contains("2E+04 photons traced, seed 1", Html("traced").Replace("20000", "2E+04", StringComparison.Ordinal), StringComparison.Ordinal);
+        Assert.Contains("20\u2009000 photons traced, seed 1", Html("traced"), StringComparison.Ordinal);
     }
+
+    [Theory]
+    [InlineData(2.34e-5, 2, "2.3\u2009×\u200910⁻⁵")]
+    [InlineData(-1.5e7, 2, "−1.5\u2009×\u200910⁷")]
+    [InlineData(0.000512, 2, "0.00051")]
+    [InlineData(598, 6, "598")]
+    [InlineData(1234.56, 3, "1230")]
+    [InlineData(-0.8, 3, "−0.8")]
+    [InlineData(0, 3, "0")]
+    public void Significant_KeepsDigitsAndWritesPowersOfTen(double value, int digits, string expected) => Assert.Equal(expected, Digits.Significant(value, digits));
 
     [Theory]
     [InlineData(3e-5, 5)]
