@@ -92,6 +92,7 @@ internal static class CommandLine
             CompareCommand.Create(context),
             InspectCommand.Create(context),
             ReportCommand.Create(context),
+            ScatterFromHazeCommand.Create(context),
             StartCommand.Create(context),
         };
         foreach (var option in root.Options)

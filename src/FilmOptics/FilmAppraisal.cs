@@ -39,6 +39,15 @@ public sealed record FilmAppraisal
     /// <summary>Efficiencies by their definitions.</summary>
     public required FilmEfficiency Efficiency { get; init; }
 
+    /// <summary>What a haze meter would read on the bare film, where it was asked for.</summary>
+    public HazeReading? Haze { get; init; }
+
+    /// <summary>Light beside a lit square zone of the backlight, where it was asked for.</summary>
+    public ZoneProfile? Zone { get; init; }
+
+    /// <summary>How far light strays per colour, where a zone was asked for.</summary>
+    public IReadOnlyList<ColourSpread>? Spread { get; init; }
+
     /// <summary>Warnings of the reader, the model and the appraisal, in that order.</summary>
     public required IReadOnlyList<string> Warnings { get; init; }
 }

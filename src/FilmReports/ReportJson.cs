@@ -56,6 +56,10 @@ public static class ReportJson
             Photons(json, "standard_error", filmCase.Film, tracing.StandardError, sum: null);
         if (appraisal.Output.Angles is { } angles)
             Angles(json, filmCase, angles);
+        if (appraisal.Haze is { } haze)
+            Haze(json, haze);
+        if (appraisal is { Zone: { } zone, Spread: { } spread })
+            Zone(json, zone, spread);
         json.WriteStartArray("warnings");
         foreach (string warning in appraisal.Warnings)
             json.WriteStringValue(warning);
@@ -222,25 +226,59 @@ public static class ReportJson
     {
         var colours = AngularColour.Of(angles, filmCase.Observer);
         json.WriteStartObject("angles");
-        List("angle_deg", colours.Select(c => (double?)c.AngleDeg));
-        List("luminance", colours.Select(c => (double?)c.RelativeLuminance));
-        List("u_prime", colours.Select(c => c.Chromaticity?.UPrime));
-        List("v_prime", colours.Select(c => c.Chromaticity?.VPrime));
+        List(json, "angle_deg", colours.Select(c => (double?)c.AngleDeg));
+        List(json, "luminance", colours.Select(c => (double?)c.RelativeLuminance));
+        List(json, "u_prime", colours.Select(c => c.Chromaticity?.UPrime));
+        List(json, "v_prime", colours.Select(c => c.Chromaticity?.VPrime));
         json.WriteEndObject();
+    }
 
-        void List(string key, IEnumerable<double?> values)
+    private static void Haze(Utf8JsonWriter json, HazeReading haze)
+    {
+        json.WriteStartObject("haze");
+        json.WriteNumber("wavelength_nm", haze.WavelengthNm);
+        Number(json, "total_transmittance", haze.TotalTransmittanceShare);
+        Number(json, "haze", haze.HazeShare);
+        Number(json, "total_transmittance_error", haze.TotalTransmittanceErrorShare);
+        Number(json, "haze_error", haze.HazeErrorShare);
+        json.WriteEndObject();
+    }
+
+    private static void Zone(Utf8JsonWriter json, ZoneProfile zone, IReadOnlyList<ColourSpread> spread)
+    {
+        json.WriteStartArray("spread");
+        foreach (var colour in spread)
         {
-            json.WriteStartArray(key);
-            foreach (double? value in values)
-            {
-                if (value is { } number)
-                    json.WriteNumberValue(number);
-                else
-                    json.WriteNullValue();
-            }
-
-            json.WriteEndArray();
+            json.WriteStartObject();
+            json.WriteString("name", colour.Name);
+            Number(json, "photons", colour.Photons);
+            Number(json, "radius_50_mm", colour.Radius50Mm);
+            Number(json, "radius_90_mm", colour.Radius90Mm);
+            json.WriteEndObject();
         }
+
+        json.WriteEndArray();
+        json.WriteStartObject("zone");
+        List(json, "distance_mm", zone.Points.Select(p => (double?)p.DistanceMm));
+        List(json, "luminance", zone.Points.Select(p => (double?)p.LuminanceShare));
+        List(json, "luminance_error", zone.Points.Select(p => (double?)p.LuminanceErrorShare));
+        List(json, "u_prime", zone.Points.Select(p => p.Chromaticity?.UPrime));
+        List(json, "v_prime", zone.Points.Select(p => p.Chromaticity?.VPrime));
+        json.WriteEndObject();
+    }
+
+    private static void List(Utf8JsonWriter json, string key, IEnumerable<double?> values)
+    {
+        json.WriteStartArray(key);
+        foreach (double? value in values)
+        {
+            if (value is { } number)
+                json.WriteNumberValue(number);
+            else
+                json.WriteNullValue();
+        }
+
+        json.WriteEndArray();
     }
 
     private static void White(Utf8JsonWriter json, WhitePoint white)

@@ -20,6 +20,7 @@ internal sealed record SpectralQuantity(string[] Columns, double LowestValue, do
         [typeof(AbsorbancePerCm)] = new(["absorbance_per_cm"], 0, double.PositiveInfinity, 10),
         [typeof(Fraction)] = new(["transmittance", "reflectance", "absorptance", "red", "green", "blue"], 0, 1, 20),
         [typeof(PerMm)] = new(["absorption_per_mm", "scattering_per_mm"], 0, double.PositiveInfinity, 50),
+        [typeof(RefractiveIndex)] = new(["refractive_index"], 0.1, 10, 50),
         // Open interval: −1 and 1 themselves would scatter straight back or not at all.
         [typeof(MeanCosine)] = new(["anisotropy"], Math.BitIncrement(-1.0), Math.BitDecrement(1.0), 50),
     };
@@ -31,6 +32,7 @@ internal sealed record SpectralQuantity(string[] Columns, double LowestValue, do
     /// <summary>What is allowed, in words.</summary>
     public string AllowedValues => (LowestValue, HighestValue) switch
     {
+        (0.1, _) => "0.1 to 10 is allowed",
         (< 0, _) => "more than -1 and less than 1 is allowed",
         (_, double.PositiveInfinity) => "at least 0 is allowed",
         _ => "0 to 1 is allowed",

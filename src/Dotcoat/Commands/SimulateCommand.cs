@@ -14,15 +14,19 @@ internal static class SimulateCommand
         var options = new FilmOptions();
         var command = new Command("simulate", "One film: spectrum, photon budget, colours, gamut.") { file };
         options.AddTo(command);
-        command.SetAction(parsed => Run(context, parsed.GetValue(file)!, options.Read(parsed)));
+        var extras = new TracedExtras();
+        extras.AddTo(command);
+        command.SetAction(parsed => Run(context, parsed.GetValue(file)!, options.Read(parsed), extras.Read(parsed)));
         return command;
     }
 
-    private static int Run(CommandContext context, string file, FilmRequest request)
+    private static int Run(CommandContext context, string file, FilmRequest request, TracedExtrasRequest extras)
     {
         var filmCase = FilmFile.Load(context.PathOf(file), request.Overrides);
         var appraisal = Progress.While(
-            context, "solving the film", () => FilmAppraiser.Appraise(filmCase, request.Model.Solve(filmCase.Film, context.CancellationToken)));
+            context,
+            "solving the film",
+            () => extras.AddTo(FilmAppraiser.Appraise(filmCase, request.Model.Solve(filmCase.Film, context.CancellationToken)), filmCase, context.CancellationToken));
         Delivery.Deliver(
             context,
             "simulate",

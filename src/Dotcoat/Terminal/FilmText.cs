@@ -49,6 +49,26 @@ internal static class FilmText
                 [.. AngularColour.Of(angles, filmCase.Observer).Select(a => new[] { Figure.Fixed(a.AngleDeg, 0), Figure.Fixed(a.RelativeLuminance, 3), Figure.Fixed(a.Chromaticity?.UPrime, 4), Figure.Fixed(a.Chromaticity?.VPrime, 4) })]);
         }
 
+        if (appraisal.Haze is { } haze)
+        {
+            text.Gap().Table(
+                [$"haze meter at {haze.WavelengthNm} nm, bare film", "share", "standard error"],
+                [
+                    ["total transmittance", Figure.Fixed(haze.TotalTransmittanceShare, 4), Figure.Digits(haze.TotalTransmittanceErrorShare, 1)],
+                    ["haze", Figure.Fixed(haze.HazeShare, 4), Figure.Digits(haze.HazeErrorShare, 1)],
+                ]);
+        }
+
+        if (appraisal is { Zone: { } zone, Spread: { } spread })
+        {
+            text.Gap().Table(
+                ["light strays, from a point", "50 % within mm", "90 % within mm"],
+                [.. spread.Select(s => new[] { s.Name, Figure.Digits(s.Radius50Mm, 3), Figure.Digits(s.Radius90Mm, 3) })]);
+            text.Gap().Table(
+                [$"one lit zone of {Figure.Digits(zone.ZoneMm, 4)} mm, mm from its centre", "luminance", "u′", "v′"],
+                [.. zone.Points.Where((_, i) => i % 8 == 0).Select(p => new[] { Figure.Fixed(p.DistanceMm, 2), Figure.Digits(p.LuminanceShare, 3), Figure.Fixed(p.Chromaticity?.UPrime, 4), Figure.Fixed(p.Chromaticity?.VPrime, 4) })]);
+        }
+
         if (appraisal.Gamut is { Count: > 0 } gamut)
         {
             text.Gap().Table(

@@ -22,6 +22,7 @@ internal sealed class LayerSection
     {
         double refractiveIndex = _section.Number("refractive_index", NumberRule.RefractiveIndex, _parts.HostRefractiveIndex);
         var absorption = loader.NumberOrSpectrum<PerMm>(_section, "absorption_per_mm", NumberRule.AtLeastZero, SpectrumKind.Absorption);
+        var particles = ParticleSection.Read(_section, refractiveIndex, _parts, loader);
         var scattering = loader.NumberOrSpectrum<PerMm>(_section, "scattering_per_mm", NumberRule.AtLeastZero, SpectrumKind.Scattering);
         double anisotropy = _section.Number("anisotropy", NumberRule.Anisotropy, 0);
         double? thicknessUm = _section.OptionalNumber("thickness_um", NumberRule.ThicknessUm);
@@ -30,16 +31,29 @@ internal sealed class LayerSection
         _section.Close();
         RequireOneOf(_section, "thickness_um", "coat_weight_g_per_m2");
         var dots = entries is null ? null : DotEntry.Mixed(entries, _section, _parts.HostDensityGPerMl);
-        if (dots is null || absorption is null || scattering is null || name is null || double.IsNaN(anisotropy))
+        if (_section.Has("particles"))
+        {
+            foreach (string key in (string[])["scattering_per_mm", "anisotropy"])
+            {
+                if (_section.Has(key))
+                    _section.Fault(key, $"{_section.Path} has particles and {key}; particles bring their own, so give one of them.");
+            }
+        }
+
+        if (dots is null || absorption is null || scattering is null || name is null || double.IsNaN(anisotropy)
+            || (particles is null && _section.Has("particles")))
+        {
             return null;
+        }
+
         var layer = new Layer
         {
             Name = name,
             ThicknessMm = (thicknessUm ?? double.NaN) / 1000,
             RefractiveIndex = refractiveIndex,
             HostAbsorption = absorption,
-            Scattering = scattering,
-            Anisotropy = Spectrum.Flat<MeanCosine>(anisotropy, "film file"),
+            Scattering = particles?.Scattering ?? scattering,
+            Anisotropy = particles?.Anisotropy ?? Spectrum.Flat<MeanCosine>(anisotropy, "film file"),
             Dots = dots,
             HostDensityGPerMl = _parts.HostDensityGPerMl,
         };

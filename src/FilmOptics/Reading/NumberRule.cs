@@ -14,6 +14,9 @@ internal sealed record NumberRule(double Low, double High, string Words, bool Is
     public static readonly NumberRule AboveZero = new(0, double.MaxValue, "above 0", IsLowOpen: true);
     public static readonly NumberRule AtLeastOne = new(1, double.MaxValue, "at least 1");
     public static readonly NumberRule RefractiveIndex = new(1, 3, "1 to 3");
+    public static readonly NumberRule ParticleIndex = new(0.1, 10, "0.1 to 10");
+    public static readonly NumberRule ParticleRadiusUm = new(0.001, 50, "0.001 to 50 µm");
+    public static readonly NumberRule SizeSpread = new(1, 3, "1 to 3");
     public static readonly NumberRule Anisotropy = new(-1, 1, "above -1, below 1", IsLowOpen: true, IsHighOpen: true);
     public static readonly NumberRule ThicknessUm = new(0, 10_000, "above 0, to 10 000 µm", IsLowOpen: true);
     public static readonly NumberRule WtPercent = new(0, 100, "at least 0, below 100 %", IsHighOpen: true);

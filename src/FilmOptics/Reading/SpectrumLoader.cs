@@ -65,6 +65,9 @@ internal sealed class SpectrumLoader(string folder, FaultList faults, List<strin
         return Spectrum<TUnit>(value, section.PathOf(key), kind);
     }
 
+    /// <summary>Something worth saying that is no fault.</summary>
+    public void Warn(string warning) => warnings.Add(warning);
+
     /// <summary>True where a file is named and its first column holds angles.</summary>
     public bool IsByAngle(Node? value, string key)
     {

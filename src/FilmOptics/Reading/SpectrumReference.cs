@@ -85,6 +85,7 @@ internal sealed record SpectrumKind(string Due, bool IsLight, params string[] Co
     public static readonly SpectrumKind Absorbance = new("a spectrum file, or a mapping with file,", false, "absorbance_per_cm");
     public static readonly SpectrumKind Absorption = new("a number or a spectrum file", false, "absorption_per_mm");
     public static readonly SpectrumKind Scattering = new("a number or a spectrum file", false, "scattering_per_mm");
+    public static readonly SpectrumKind ParticleIndex = new("a number or a spectrum file", false, "refractive_index");
     public static readonly SpectrumKind Reflectance = new("a number or a spectrum file", false, "reflectance");
     public static readonly SpectrumKind Absorptance = new("a number or a spectrum file", false, "absorptance");
     public static readonly SpectrumKind Filters = new("a file with the columns wavelength_nm, red, green, blue", false, "red", "green", "blue");

@@ -1,6 +1,4 @@
-using Colorimetry;
-
-namespace FilmOptics;
+namespace Colorimetry;
 
 /// <summary>A refractive index, or its absorbing part, against wavelength.</summary>
 public readonly struct RefractiveIndex : ISpectralUnit
