@@ -48,15 +48,18 @@ internal static class InspectionJson
     private static Dictionary<string, object?> Colour(LightColour colour) => new(StringComparer.Ordinal)
     {
         ["observer"] = colour.Observer,
-        ["X"] = colour.Tristimulus.X,
-        ["Y"] = colour.Tristimulus.Y,
-        ["Z"] = colour.Tristimulus.Z,
+        ["X_per_watt"] = colour.Tristimulus.X,
+        ["Y_per_watt"] = colour.Tristimulus.Y,
+        ["Z_per_watt"] = colour.Tristimulus.Z,
         ["x"] = colour.Chromaticity.X,
         ["y"] = colour.Chromaticity.Y,
         ["u_prime"] = colour.Chromaticity.UPrime,
         ["v_prime"] = colour.Chromaticity.VPrime,
         ["cct_k"] = colour.CctKelvin,
         ["duv"] = colour.Duv,
-        ["luminous_efficacy_lm_per_w"] = colour.LumensPerWatt,
+        ["dominant_nm"] = colour.Dominant is { IsComplementary: false } d ? d.WavelengthNm : (double?)null,
+        ["complementary_nm"] = colour.Dominant is { IsComplementary: true } p ? p.WavelengthNm : (double?)null,
+        ["excitation_purity"] = colour.Dominant?.ExcitationPurityShare,
+        ["luminous_efficacy_lm_per_w"] = colour.Tristimulus.Y,
     };
 }

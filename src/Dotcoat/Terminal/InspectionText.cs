@@ -47,12 +47,14 @@ internal static class InspectionText
                 [$"colour of {column.Name}", "value"],
                 [
                     ["observer", colour.Observer],
-                    ["X, Y, Z (683 lm/W)", string.Join(", ", new[] { colour.Tristimulus.X, colour.Tristimulus.Y, colour.Tristimulus.Z }.Select(v => Figure.Digits(v, 5)))],
+                    ["X, Y, Z per watt (683 lm/W)", string.Join(", ", new[] { colour.Tristimulus.X, colour.Tristimulus.Y, colour.Tristimulus.Z }.Select(v => Figure.Digits(v, 5)))],
                     ["x, y", $"{Figure.Fixed(colour.Chromaticity.X, 5)}, {Figure.Fixed(colour.Chromaticity.Y, 5)}"],
                     ["u′, v′", $"{Figure.Fixed(colour.Chromaticity.UPrime, 5)}, {Figure.Fixed(colour.Chromaticity.VPrime, 5)}"],
                     ["CCT K", Figure.Fixed(colour.CctKelvin, 0)],
                     ["Duv", Figure.Signed(colour.Duv, 4)],
-                    ["luminous efficacy lm/W", Figure.Fixed(colour.LumensPerWatt, 2)],
+                    [$"{(colour.Dominant?.IsComplementary == true ? "complementary" : "dominant")} wavelength nm (white E)", Figure.Fixed(colour.Dominant?.WavelengthNm, 1)],
+                    ["excitation purity", Figure.Fixed(colour.Dominant?.ExcitationPurityShare, 4)],
+                    ["luminous efficacy lm/W", Figure.Fixed(colour.Tristimulus.Y, 2)],
                 ]);
         }
 
