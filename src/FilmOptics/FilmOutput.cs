@@ -70,5 +70,5 @@ public sealed record FilmOutput
 /// <param name="EstimateShare">The solver's own estimate of its largest error.</param>
 /// <param name="Ordinates">Directions per hemisphere.</param>
 /// <param name="Cells">Depth cells.</param>
-/// <param name="WavelengthBins">Wavelength bins solved.</param>
+/// <param name="WavelengthBins">Wavelengths solved; where one table over absorption serves them all, its nodes.</param>
 public sealed record SolverAccuracy(double AskedShare, double EstimateShare, int Ordinates, int Cells, int WavelengthBins);

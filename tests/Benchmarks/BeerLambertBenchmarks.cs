@@ -55,7 +55,7 @@ public class BeerLambertBenchmarks
         return _product;
     }
 
-    private static FilmCase Case(Chromaticity white, double maxMgPerMl, double startFactor = 1) => new()
+    internal static FilmCase Case(Chromaticity white, double maxMgPerMl, double startFactor = 1) => new()
     {
         Film = FilmGenerators.TwoLots().WithLoadings((_, dots) => startFactor * dots.LoadingMgPerMl),
         Observer = StandardObserver.Cie1931,

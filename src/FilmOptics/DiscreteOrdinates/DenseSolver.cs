@@ -18,8 +18,7 @@ internal static class DenseSolver
             {
                 var target = matrix.Slice(row * n, n);
                 double factor = target[pivot] * reciprocal;
-                for (int column = pivot + 1; column < n; column++)
-                    target[column] -= factor * pivotRow[column];
+                LaneAlgebra.AddScaled(target[(pivot + 1)..], pivotRow[(pivot + 1)..], -factor);
                 right[row] -= factor * right[pivot];
             }
         }

@@ -148,6 +148,7 @@ internal sealed class FilmPlan
 }
 
 /// <summary>How finely a film is solved.</summary>
-/// <param name="Ordinates">Nodes in each piece of the directions.</param>
-/// <param name="Cells">Cells of a layer with dots, a power of two, at least 4.</param>
-internal readonly record struct Effort(int Ordinates, int Cells);
+/// <param name="Ordinates">Directions in each piece of a hemisphere.</param>
+/// <param name="Cells">Depth cells of a layer with dots; a power of two, at least 2.</param>
+/// <param name="StepNm">Distance of the wavelengths that are solved where no table over absorption serves; 1 solves each and uses no table.</param>
+internal readonly record struct Effort(int Ordinates, int Cells, int StepNm);

@@ -1,4 +1,5 @@
 using System.Runtime.CompilerServices;
+using System.Runtime.Intrinsics;
 
 namespace FilmOptics.DiscreteOrdinates;
 
@@ -101,6 +102,39 @@ internal static class LaneAlgebra
                 Put(ref Unsafe.Add(ref r, (row * result.Stride) + column), s, into);
             }
         }
+    }
+
+    /// <summary>target += source × factor.</summary>
+    [MethodImpl(Hot)]
+    public static void AddScaled(Span<double> target, ReadOnlySpan<double> source, double factor)
+    {
+        var wide = Vector512.Create(factor);
+        int i = 0;
+        for (; i <= source.Length - Vector512<double>.Count; i += Vector512<double>.Count)
+        {
+            Vector512.MultiplyAddEstimate(Vector512.Create(source[i..]), wide, Vector512.Create<double>(target[i..])).CopyTo(target[i..]);
+        }
+
+        for (; i < source.Length; i++)
+            target[i] += source[i] * factor;
+    }
+
+    /// <summary>Σ one × other.</summary>
+    public static double Dot(ReadOnlySpan<double> one, ReadOnlySpan<double> other)
+    {
+        double sum = 0;
+        int i = 0;
+        if (one.Length >= Vector512<double>.Count)
+        {
+            var wide = Vector512<double>.Zero;
+            for (; i <= one.Length - Vector512<double>.Count; i += Vector512<double>.Count)
+                wide = Vector512.MultiplyAddEstimate(Vector512.Create(one[i..]), Vector512.Create(other[i..]), wide);
+            sum = Vector512.Sum(wide);
+        }
+
+        for (; i < one.Length; i++)
+            sum += one[i] * other[i];
+        return sum;
     }
 
     /// <summary>Lower Cholesky factor in place of the lower triangle; the diagonal holds reciprocals.</summary>

@@ -2,77 +2,57 @@ using Colorimetry;
 
 namespace FilmOptics.DiscreteOrdinates;
 
-/// <summary>Turns excitations into spectra and a budget.</summary>
-internal sealed class OutputBuilder(Film film, FilmPlan plan, FilmSpectra spectra, StateWeights weights, Reemission reemission)
+/// <summary>Turns what the lots emit into spectra and a budget.</summary>
+internal sealed class OutputBuilder(Film film, FilmKernels kernels, FilmLights lights, StateWeights weights, Reemission reemission)
 {
-    private readonly int _above = plan.CellCount;
+    private readonly FilmPlan _plan = kernels.Plan;
+    private readonly double[] _byState = new double[kernels.States];
 
-    /// <summary>The film's output for the excitations of each emitter in each cell.</summary>
-    public FilmOutput Build(double[] excitations, string model)
+    /// <summary>The film's output.</summary>
+    public FilmOutput Build(string model)
     {
-        var emitted = new double[spectra.UsedLots.Length][];
-        for (int lot = 0; lot < emitted.Length; lot++)
-            emitted[lot] = reemission.Emitted(lot, excitations);
-
-        double[] source = weights.Gather(spectra.Source);
-        double[][] emission = [.. spectra.Emission.Select(light => weights.Gather(light))];
-        double Row(int row)
+        var (lost, total, first) = (new double[film.Lots.Count], new double[film.Lots.Count], new double[film.Lots.Count]);
+        for (int e = 0; e < lights.Emitters.Length; e++)
         {
-            double sum = Dot(source, reemission.SourceRow(row));
-            for (int lot = 0; lot < emitted.Length; lot++)
-                sum += Dot(emission[lot], reemission.RowOf(row, emitted[lot]));
-            return sum;
+            var emitter = lights.Emitters[e];
+            double here = reemission.TotalIn(e);
+            total[emitter.Lot] += here;
+            lost[emitter.Lot] += (1 - emitter.YieldShare) * here;
+            first[emitter.Lot] += reemission.FirstIn(e);
         }
 
         double host = 0;
-        for (int layer = 0; layer < spectra.Layers.Count; layer++)
+        for (int layer = 0; layer < _plan.Layers.Count; layer++)
+            host += reemission.InHost(layer);
+        int above = _plan.CellCount;
+        var unconverted = LightIn(0, above, "source");
+        var converted = new Spectrum<PhotonPerNm>[film.Lots.Count];
+        double convertedSum = 0;
+        for (int lot = 0; lot < converted.Length; lot++)
         {
-            double[] fromSource = reemission.Gather(spectra.Source, spectra.HostShare[layer]);
-            double[][] fromLots = [.. spectra.Emission.Select(light => reemission.Gather(light, spectra.HostShare[layer]))];
-            for (int cell = plan.FirstCell[layer]; cell < plan.FirstCell[layer] + plan.Cells[layer]; cell++)
-            {
-                host += Dot(fromSource, reemission.SourceRow(cell));
-                for (int lot = 0; lot < emitted.Length; lot++)
-                    host += Dot(fromLots[lot], reemission.RowOf(cell, emitted[lot]));
-            }
+            int used = Array.IndexOf(lights.UsedLots, lot);
+            converted[lot] = used < 0
+                ? Spectrum.Flat<PhotonPerNm>(0, $"{film.Lots[lot].Name}, not in the film")
+                : LightIn(1 + used, above, film.Lots[lot].Name);
+            convertedSum += converted[lot].Integral;
         }
 
-        var (lost, total, first) = (new double[film.Lots.Count], new double[film.Lots.Count], new double[film.Lots.Count]);
-        for (int e = 0; e < spectra.Emitters.Length; e++)
-        {
-            var emitter = spectra.Emitters[e];
-            double here = reemission.TotalOf(e, excitations);
-            total[emitter.Lot] += here;
-            lost[emitter.Lot] += (1 - emitter.YieldShare) * here;
-            double[] fromSource = reemission.Gather(spectra.Source, spectra.DotShare[e]);
-            for (int cell = 0; cell < plan.Cells[emitter.Layer]; cell++)
-                first[emitter.Lot] += Dot(fromSource, reemission.SourceRow(plan.FirstCell[emitter.Layer] + cell));
-        }
-
-        var unconverted = Spread(spectra.Source, reemission.SourceRow(_above), "source");
-        Spectrum<PhotonPerNm>[] converted = [.. film.Lots.Select((lot, position) =>
-        {
-            int used = Array.IndexOf(spectra.UsedLots, position);
-            return used < 0
-                ? Spectrum.Flat<PhotonPerNm>(0, $"{lot.Name}, not in the film")
-                : Spread(spectra.Emission[used], reemission.RowOf(_above, emitted[used]), lot.Name);
-        })];
-        var angles = plan.ViewBeam >= 0 ? Angles(emitted) : null;
+        var angles = _plan.ViewBeam >= 0 ? Angles() : null;
         return new()
         {
             Model = model,
             Angles = angles,
-            NormalRadiance = plan.SourceBeam >= 0 ? null : angles?.Radiance[0],
+            NormalRadiance = _plan.SourceBeam >= 0 ? null : angles?.Radiance[0],
             Unconverted = unconverted,
             ConvertedByLot = converted,
             Budget = new()
             {
                 Unconverted = unconverted.Integral,
-                Converted = converted.Sum(light => light.Integral),
-                LostBelow = Row(_above + 1),
-                LostAbove = Row(_above + 2),
+                Converted = convertedSum,
+                LostBelow = reemission.InEnd(1),
+                LostAbove = reemission.InEnd(2),
                 LostInHost = host,
-                LostAtEdges = Row(_above + 3),
+                LostAtEdges = reemission.InEnd(3),
                 LostInLots = lost,
                 SourceAbsorbedBy = first,
                 Excitations = total,
@@ -80,57 +60,50 @@ internal sealed class OutputBuilder(Film film, FilmPlan plan, FilmSpectra spectr
         };
     }
 
-    private AngularOutput Angles(double[][] emitted)
+    private AngularOutput Angles()
     {
-        // Amplitudes in each direction of the air above, from the source and from each lot, at each state.
-        double[][] source = [.. Enumerable.Range(0, plan.AirCount).Select(j => reemission.SourceRow(plan.CellCount + 4 + j))];
-        double[][][] lots = [.. emitted.Select(cells => Enumerable.Range(0, plan.AirCount)
-            .Select(j => reemission.RowOf(plan.CellCount + 4 + j, cells)).ToArray())];
         double[] anglesDeg = [.. Enumerable.Range(0, 17).Select(i => 5.0 * i)];
         return new(anglesDeg, [.. anglesDeg.Select(angleDeg =>
         {
-            double[] directions = plan.RadianceWeights(angleDeg);
+            double[] directions = _plan.RadianceWeights(angleDeg);
             var samples = new double[WavelengthGrid.Count];
-            Add(samples, spectra.Source, Combine(source, directions));
-            for (int lot = 0; lot < lots.Length; lot++)
-                Add(samples, spectra.Emission[lot], Combine(lots[lot], directions));
+            for (int line = 0; line < lights.Lines.Length; line++)
+            {
+                Array.Clear(_byState);
+                for (int j = 0; j < directions.Length; j++)
+                    AddRow(line, _plan.CellCount + 4 + j, directions[j]);
+                AddLight(samples, line);
+            }
+
             return Spectrum.FromSamples<PhotonPerNm>(samples, FormattableString.Invariant($"radiance at {angleDeg} degrees"));
         })]);
     }
 
-    private void Add(double[] samples, double[] light, double[] shareByState)
-    {
-        for (int i = 0; i < light.Length; i++)
-        {
-            if (light[i] > 0)
-                samples[spectra.Bins[i]] += light[i] * weights.At(i, shareByState);
-        }
-    }
-
-    private static double[] Combine(double[][] rows, double[] factors)
-    {
-        var sum = new double[rows[0].Length];
-        for (int row = 0; row < rows.Length; row++)
-        {
-            for (int i = 0; i < sum.Length; i++)
-                sum[i] += factors[row] * rows[row][i];
-        }
-
-        return sum;
-    }
-
-    private Spectrum<PhotonPerNm> Spread(double[] light, double[] shareByState, string name)
+    private Spectrum<PhotonPerNm> LightIn(int line, int row, string name)
     {
         var samples = new double[WavelengthGrid.Count];
-        Add(samples, light, shareByState);
+        Array.Clear(_byState);
+        AddRow(line, row, 1);
+        AddLight(samples, line);
         return Spectrum.FromSamples<PhotonPerNm>(samples, $"{name}, discrete ordinates");
     }
 
-    private static double Dot(double[] one, double[] other)
+    // What of a line's photon arrives in a row, at each state.
+    private void AddRow(int line, int row, double factor)
     {
-        double sum = 0;
-        for (int i = 0; i < one.Length; i++)
-            sum += one[i] * other[i];
-        return sum;
+        int first = row * _plan.Inputs;
+        for (int state = 0; state < _byState.Length; state++)
+        {
+            var answers = kernels.Of(state).Slice(first, _plan.Inputs);
+            double sum = line == 0 ? answers[0] : LaneAlgebra.Dot(reemission.Emitted[line - 1], answers[1..]);
+            _byState[state] += factor * sum;
+        }
+    }
+
+    private void AddLight(double[] samples, int line)
+    {
+        var light = lights.Lines[line];
+        for (int bin = light.First; bin < light.End; bin++)
+            samples[lights.Bins[bin]] += light.Photons[bin] * weights.At(bin, _byState);
     }
 }

@@ -7,15 +7,16 @@ internal static class StateSolver<T>
     /// <summary>Fills the answers of all states.</summary>
     /// <param name="plan">The film.</param>
     /// <param name="states">The states.</param>
+    /// <param name="places">Where each state's answers go.</param>
     /// <param name="bypassShare">Source light that misses the film.</param>
     /// <param name="longestFlightMm">Guided light that would fly on for longer comes out at the edges; infinite where none does.</param>
-    /// <param name="arena">Scratch.</param>
-    /// <param name="answers">At [state][row × inputs + input], see <see cref="FilmPlan.Rows"/>.</param>
+    /// <param name="answers">At [place][row × inputs + input], see <see cref="FilmPlan.Rows"/>.</param>
     /// <param name="cancellationToken">Heeded between batches.</param>
     public static void Solve(
-        FilmPlan plan, OpticalStates states, double bypassShare, double longestFlightMm, LaneArena<T> arena, Span<double> answers, CancellationToken cancellationToken)
+        FilmPlan plan, OpticalStates states, ReadOnlySpan<int> places, double bypassShare, double longestFlightMm, Span<double> answers, CancellationToken cancellationToken)
     {
         int size = plan.Rows * plan.Inputs;
+        var arena = LaneArena<T>.Rent();
         for (int first = 0; first < states.Count; first += T.Count)
         {
             cancellationToken.ThrowIfCancellationRequested();
@@ -25,7 +26,7 @@ internal static class StateSolver<T>
             var closed = CavityClosure<T>.Close(plan, lanes, bypassShare, double.IsFinite(longestFlightMm), pile, arena);
             for (int lane = 0; lane < T.Count && first + lane < states.Count; lane++)
             {
-                var answer = answers.Slice((first + lane) * size, size);
+                var answer = answers.Slice(places[first + lane] * size, size);
                 for (int row = 0; row < plan.Rows; row++)
                 {
                     for (int input = 0; input < plan.Inputs; input++)
@@ -35,6 +36,8 @@ internal static class StateSolver<T>
 
             arena.Release(mark);
         }
+
+        LaneArena<T>.Return(arena);
     }
 
     private static LayerPile<T> Pile(FilmPlan plan, Lanes lanes, double longestFlightMm, LaneArena<T> arena)

@@ -1,41 +1,60 @@
 namespace FilmOptics.DiscreteOrdinates;
 
 /// <summary>How each bin's answer is a weighted sum of the answers of neighbouring states; weights of a bin sum to 1.</summary>
-/// <param name="States">States solved.</param>
-/// <param name="Width">States that a bin draws on.</param>
-/// <param name="First">First of them, by bin.</param>
-/// <param name="Weights">Their weights, at [bin × width + i].</param>
-internal sealed record StateWeights(int States, int Width, int[] First, double[] Weights)
+/// <param name="bins">Bins.</param>
+/// <param name="width">States that a bin draws on.</param>
+internal sealed class StateWeights(int bins, int width)
 {
-    /// <summary>Every bin is a state of its own.</summary>
-    public static StateWeights Each(int bins)
-    {
-        var ones = new double[bins];
-        Array.Fill(ones, 1);
-        return new(bins, 1, [.. Enumerable.Range(0, bins)], ones);
-    }
+    public int Width { get; } = width;
 
-    /// <summary>A sum over bins brought to the states: moment[state] = Σ weight × value.</summary>
-    public double[] Gather(ReadOnlySpan<double> values)
-    {
-        var moment = new double[States];
-        for (int bin = 0; bin < values.Length; bin++)
-        {
-            if (values[bin] == 0)
-                continue;
-            for (int i = 0; i < Width; i++)
-                moment[First[bin] + i] += values[bin] * Weights[(bin * Width) + i];
-        }
+    /// <summary>First of the states, by bin.</summary>
+    public int[] First { get; } = new int[bins];
 
-        return moment;
-    }
+    /// <summary>Their weights, at [bin × width + i].</summary>
+    public double[] Weights { get; } = new double[bins * width];
 
     /// <summary>Values of the states brought to a bin.</summary>
     public double At(int bin, ReadOnlySpan<double> stateValues)
     {
-        double sum = 0;
-        for (int i = 0; i < Width; i++)
-            sum += stateValues[First[bin] + i] * Weights[(bin * Width) + i];
-        return sum;
+        var weights = Weights.AsSpan(bin * Width, Width);
+        var values = stateValues.Slice(First[bin], Width);
+        return LaneAlgebra.Dot(values, weights);
+    }
+
+    /// <summary>Lets a bin draw on states that lie at 0, 1, 2… by Lagrange's formula.</summary>
+    /// <param name="bin">The bin.</param>
+    /// <param name="place">Where it lies among them.</param>
+    /// <param name="states">How many states there are, at least the width.</param>
+    public void Interpolate(int bin, double place, int states)
+    {
+        int first = Math.Clamp((int)place - ((Width - 1) / 2), 0, states - Width);
+        First[bin] = first;
+        double t = place - first;
+        var weights = Weights.AsSpan(bin * Width, Width);
+        for (int i = 0; i < weights.Length; i++)
+        {
+            weights[i] = 1;
+            for (int k = 0; k < weights.Length; k++)
+            {
+                if (k != i)
+                    weights[i] *= (t - k) / (i - k);
+            }
+        }
+    }
+
+    /// <summary>Lets a bin take the answer of the state nearest to it.</summary>
+    /// <param name="bin">The bin.</param>
+    /// <param name="place">Where it lies.</param>
+    /// <param name="among">States to choose from, rising.</param>
+    /// <param name="states">How many states there are.</param>
+    public void TakeNearest(int bin, int place, ReadOnlySpan<int> among, int states)
+    {
+        int after = among.BinarySearch(place);
+        after = after >= 0 ? after : Math.Min(~after, among.Length - 1);
+        int nearest = after > 0 && place - among[after - 1] < among[after] - place ? among[after - 1] : among[after];
+        First[bin] = Math.Min(nearest, states - Width);
+        var weights = Weights.AsSpan(bin * Width, Width);
+        weights.Clear();
+        weights[nearest - First[bin]] = 1;
     }
 }

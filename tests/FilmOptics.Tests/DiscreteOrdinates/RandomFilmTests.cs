@@ -13,45 +13,34 @@ public sealed class DiscreteRandomFilmTests
         {
             if (!CanEnd(film))
                 return;
-            var output = new DiscreteOrdinatesModel().SolveAt(film, new Effort(4, 4), CancellationToken.None);
+            var output = new DiscreteOrdinatesModel().SolveAt(film, new Effort(4, 4, 5), CancellationToken.None);
             output.Budget.RequireClosed(1e-10);
             Assert.Equal(output.Budget.Converted, output.ConvertedByLot.Sum(lot => lot.Integral), 1e-12);
         },
         iter: 10_000);
 
-    [Theory]
-    [InlineData(1e-3)]
-    [InlineData(1e-4)]
-    [InlineData(1e-5)]
-    public void StatedError_Holds(double accuracyShare)
+    [Fact]
+    public void StatedError_Holds()
     {
         const int films = 200;
-        int overAsked = 0, overEstimate = 0, reached = 0;
-        string worst = "";
+        Tally[] tallies = [new(1e-3), new(3e-4), new(1e-4), new(1e-5)];
         FilmGenerators.Films.Sample(
             film =>
             {
                 if (!CanEnd(film))
                     return;
-                var output = new DiscreteOrdinatesModel(accuracyShare).Solve(film, CancellationToken.None);
-                var reference = new DiscreteOrdinatesModel().SolveAt(film, new Effort(16, 32), CancellationToken.None);
-                double error = OutputError.Between(output, reference);
-                if (output.Accuracy!.EstimateShare > accuracyShare)
-                    return;
-                Interlocked.Increment(ref reached);
-                if (error > accuracyShare)
-                    Interlocked.Increment(ref overAsked);
-                if (error > output.Accuracy.EstimateShare)
-                {
-                    Interlocked.Increment(ref overEstimate);
-                    worst = $"{worst} {error:g2}>{output.Accuracy.EstimateShare:g2}";
-                }
+                var reference = new DiscreteOrdinatesModel().SolveAt(film, new Effort(16, 32, 1), CancellationToken.None);
+                foreach (var tally in tallies)
+                    tally.Take(film, reference);
             },
             iter: films,
             seed: "0000KTrbCYU4");
-        Assert.True(overAsked <= 0.01 * reached, $"{overAsked} of {reached} films are worse than the {accuracyShare} asked for; {worst}");
-        Assert.True(overEstimate <= 0.05 * reached, $"{overEstimate} of {reached} films are worse than their estimate; {worst}");
-        Assert.True(reached >= 0.6 * films, $"only {reached} of {films} films reached {accuracyShare}");
+        foreach (var tally in tallies)
+        {
+            Assert.True(tally.OverAsked <= 0.01 * tally.Reached, tally.ToString());
+            Assert.True(tally.OverEstimate <= 0.05 * tally.Reached, tally.ToString());
+            Assert.True(tally.Reached >= 0.6 * films, tally.ToString());
+        }
     }
 
     [Fact]
@@ -64,4 +53,35 @@ public sealed class DiscreteRandomFilmTests
 
     // Both returns 1 and nothing that absorbs: no model has an answer, and the next test sees it refused.
     private static bool CanEnd(Film film) => film.Cavity.BelowReflectance.Samples[0] < 1 || film.Cavity.AboveReflectance.Samples[0] < 1;
+
+    // How an accuracy fared; films that say they did not reach it do not count.
+    private sealed class Tally(double accuracyShare)
+    {
+        private readonly Lock _lock = new();
+        private string _worst = "";
+
+        public int Reached { get; private set; }
+
+        public int OverAsked { get; private set; }
+
+        public int OverEstimate { get; private set; }
+
+        public void Take(Film film, FilmOutput reference)
+        {
+            var output = new DiscreteOrdinatesModel(accuracyShare).Solve(film, CancellationToken.None);
+            double error = OutputError.Between(output, reference), estimate = output.Accuracy!.EstimateShare;
+            if (estimate > accuracyShare)
+                return;
+            lock (_lock)
+            {
+                Reached++;
+                OverAsked += error > accuracyShare ? 1 : 0;
+                OverEstimate += error > estimate ? 1 : 0;
+                _worst += error > estimate ? FormattableString.Invariant($" {error:g2}>{estimate:g2}") : "";
+            }
+        }
+
+        public override string ToString() =>
+            FormattableString.Invariant($"at {accuracyShare}: {Reached} films reached it, {OverAsked} are worse than that, {OverEstimate} worse than their estimate:{_worst}");
+    }
 }

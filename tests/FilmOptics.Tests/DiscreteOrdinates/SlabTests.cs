@@ -24,7 +24,7 @@ public sealed class DiscreteSlabTests
     private static void AssertSlab(string name, double[] slab, Incidence incidence, double reflectance, double transmittance, double allowed)
     {
         var film = ReferenceFilms.Slab(slab[0], slab[1], slab[2], slab[3], incidence);
-        var budget = new DiscreteOrdinatesModel().SolveAt(film, new Effort(16, 4), TestContext.Current.CancellationToken).Budget;
+        var budget = new DiscreteOrdinatesModel().SolveAt(film, new Effort(16, 4, 1), TestContext.Current.CancellationToken).Budget;
         string what = $"slab {name}, {incidence.Kind}";
         Assert.True(Math.Abs(budget.LostBelow - reflectance) <= allowed, $"{what}: reflectance {budget.LostBelow}, expected {reflectance}");
         Assert.True(Math.Abs(budget.Unconverted - transmittance) <= allowed, $"{what}: transmittance {budget.Unconverted}, expected {transmittance}");
