@@ -1,3 +1,4 @@
+using System.Buffers;
 using Colorimetry;
 
 namespace FilmOptics.DiscreteOrdinates;
@@ -49,14 +50,18 @@ internal sealed class FilmSolver(FilmLights lights, int layers)
         var axis = new WavelengthAxis(Lights, shape.Shape.MayGuide ? 1 : effort.StepNm);
         var plan = shape.Plan(film, filmLayers, effort);
         var states = OpticalStates.At(film, filmLayers, axis.Bins);
-        var kernels = new FilmKernels(plan, axis.States, new double[axis.States * plan.Rows * plan.Inputs]);
+        States = axis.Bins.Length;
+        int length = States * plan.Rows * plan.Inputs;
+        double[] answers = ArrayPool<double>.Shared.Rent(length);
+        var kernels = new FilmKernels(plan, States, answers);
         StateSolver<WideLanes>.Solve(
-            plan, states, axis.Used, film.Cavity.BypassShare, states.LongestFlightMm(film, filmLayers), kernels.Answers, cancellationToken);
-        States = axis.Used.Length;
+            plan, states, film.Cavity.BypassShare, states.LongestFlightMm(film, filmLayers), answers.AsSpan(0, length), cancellationToken);
         RequireNumbers(kernels, axis);
-        var moments = new LightMoments(_spectra, axis.States);
+        var moments = new LightMoments(_spectra, States);
         moments.Fill(axis.Weights);
-        return Build(film, kernels, axis.Weights, moments, effort, model);
+        var output = Build(film, kernels, axis.Weights, moments, effort, model);
+        ArrayPool<double>.Shared.Return(answers);
+        return output;
     }
 
     private FilmOutput Build(Film film, FilmKernels kernels, StateWeights weights, LightMoments moments, Effort effort, string model)
@@ -86,9 +91,9 @@ internal sealed class FilmSolver(FilmLights lights, int layers)
 
     private static void RequireNumbers(FilmKernels kernels, WavelengthAxis axis)
     {
-        for (int i = 0; i < axis.Used.Length; i++)
+        for (int i = 0; i < axis.Bins.Length; i++)
         {
-            if (kernels.Of(axis.Used[i]).ContainsAnyExceptInRange(double.MinValue, double.MaxValue))
+            if (kernels.Of(i).ContainsAnyExceptInRange(double.MinValue, double.MaxValue))
                 throw new NumericalFailureException(FormattableString.Invariant($"The exact model finds no number for this film at {WavelengthGrid.NmAt(axis.Bins[i])} nm."));
         }
     }

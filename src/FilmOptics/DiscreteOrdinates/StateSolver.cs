@@ -1,3 +1,6 @@
+using System.Runtime.CompilerServices;
+using System.Runtime.InteropServices;
+
 namespace FilmOptics.DiscreteOrdinates;
 
 /// <summary>Solves a film without re-emission for many optical states: where a source photon and a photon emitted in a cell go.</summary>
@@ -7,13 +10,12 @@ internal static class StateSolver<T>
     /// <summary>Fills the answers of all states.</summary>
     /// <param name="plan">The film.</param>
     /// <param name="states">The states.</param>
-    /// <param name="places">Where each state's answers go.</param>
     /// <param name="bypassShare">Source light that misses the film.</param>
     /// <param name="longestFlightMm">Guided light that would fly on for longer comes out at the edges; infinite where none does.</param>
-    /// <param name="answers">At [place][row × inputs + input], see <see cref="FilmPlan.Rows"/>.</param>
+    /// <param name="answers">At [state][row × inputs + input], see <see cref="FilmPlan.Rows"/>.</param>
     /// <param name="cancellationToken">Heeded between batches.</param>
     public static void Solve(
-        FilmPlan plan, OpticalStates states, ReadOnlySpan<int> places, double bypassShare, double longestFlightMm, Span<double> answers, CancellationToken cancellationToken)
+        FilmPlan plan, OpticalStates states, double bypassShare, double longestFlightMm, Span<double> answers, CancellationToken cancellationToken)
     {
         int size = plan.Rows * plan.Inputs;
         var arena = LaneArena<T>.Rent();
@@ -24,20 +26,28 @@ internal static class StateSolver<T>
             var lanes = new Lanes(states, first);
             var pile = Pile(plan, lanes, longestFlightMm, arena);
             var closed = CavityClosure<T>.Close(plan, lanes, bypassShare, double.IsFinite(longestFlightMm), pile, arena);
-            for (int lane = 0; lane < T.Count && first + lane < states.Count; lane++)
-            {
-                var answer = answers.Slice(places[first + lane] * size, size);
-                for (int row = 0; row < plan.Rows; row++)
-                {
-                    for (int input = 0; input < plan.Inputs; input++)
-                        answer[(row * plan.Inputs) + input] = closed[row, input][lane];
-                }
-            }
-
+            Scatter(closed, answers[(first * size)..], Math.Min(T.Count, states.Count - first), size);
             arena.Release(mark);
         }
 
         LaneArena<T>.Return(arena);
+    }
+
+    // Lanes lie side by side; each state's answers lie together.
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)]
+    private static void Scatter(LaneMatrix<T> closed, Span<double> answers, int states, int size)
+    {
+        int columns = size / closed.Rows;
+        for (int row = 0; row < closed.Rows; row++)
+        {
+            var lanes = MemoryMarshal.Cast<T, double>(closed.Row(row));
+            for (int lane = 0; lane < states; lane++)
+            {
+                var answer = answers.Slice((lane * size) + (row * columns), columns);
+                for (int input = 0; input < answer.Length; input++)
+                    answer[input] = lanes[(input * T.Count) + lane];
+            }
+        }
     }
 
     private static LayerPile<T> Pile(FilmPlan plan, Lanes lanes, double longestFlightMm, LaneArena<T> arena)

@@ -45,14 +45,13 @@ internal sealed class StateWeights(int bins, int width)
     /// <summary>Lets a bin take the answer of the state nearest to it.</summary>
     /// <param name="bin">The bin.</param>
     /// <param name="place">Where it lies.</param>
-    /// <param name="among">States to choose from, rising.</param>
-    /// <param name="states">How many states there are.</param>
-    public void TakeNearest(int bin, int place, ReadOnlySpan<int> among, int states)
+    /// <param name="states">Where the states lie, rising.</param>
+    public void TakeNearest(int bin, int place, ReadOnlySpan<int> states)
     {
-        int after = among.BinarySearch(place);
-        after = after >= 0 ? after : Math.Min(~after, among.Length - 1);
-        int nearest = after > 0 && place - among[after - 1] < among[after] - place ? among[after - 1] : among[after];
-        First[bin] = Math.Min(nearest, states - Width);
+        int after = states.BinarySearch(place);
+        after = after >= 0 ? after : Math.Min(~after, states.Length - 1);
+        int nearest = after > 0 && place - states[after - 1] < states[after] - place ? after - 1 : after;
+        First[bin] = Math.Min(nearest, states.Length - Width);
         var weights = Weights.AsSpan(bin * Width, Width);
         weights.Clear();
         weights[nearest - First[bin]] = 1;

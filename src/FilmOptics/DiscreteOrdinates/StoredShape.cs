@@ -63,8 +63,7 @@ internal sealed class StoredShape(FilmShape shape, bool withAngles, double large
         var states = OpticalStates.At(film, layers, new int[axis.Nodes]);
         axis.NodesPerMm().CopyTo(states.Absorption[axis.Layer], 0);
         var answers = new double[axis.Nodes * plan.Rows * plan.Inputs];
-        int[] places = [.. Enumerable.Range(0, axis.Nodes)];
-        StateSolver<WideLanes>.Solve(plan, states, places, film.Cavity.BypassShare, states.LongestFlightMm(film, layers), answers, cancellationToken);
+        StateSolver<WideLanes>.Solve(plan, states, film.Cavity.BypassShare, states.LongestFlightMm(film, layers), answers, cancellationToken);
         return new FilmKernels(plan, axis.Nodes, answers);
     }
 }

@@ -10,10 +10,6 @@ internal sealed class WavelengthAxis
     // Where every line is this far below its peak, the nearest state will do.
     private const double FaintShare = 1e-7;
 
-    private readonly int _first;
-    private readonly int _stepNm;
-    private readonly int _states;
-
     /// <summary>An axis over the bins of a film's light.</summary>
     /// <param name="lights">The light.</param>
     /// <param name="stepNm">Distance of the states; 1 makes each bin a state of its own.</param>
@@ -21,40 +17,35 @@ internal sealed class WavelengthAxis
     {
         int[] bins = lights.Bins;
         int range = bins[^1] - bins[0];
-        _stepNm = range < stepNm * CubicWidth ? 1 : stepNm;
-        _states = ((range + _stepNm - 1) / _stepNm) + 1;
-        _first = Math.Max(0, Math.Min(bins[0], WavelengthGrid.Count - 1 - ((_states - 1) * _stepNm)));
-        Weights = new StateWeights(bins.Length, _stepNm == 1 ? 1 : CubicWidth);
-        var used = new bool[_states];
-        bool[] isBright = lights.BrighterThan(_stepNm == 1 ? 0 : FaintShare);
+        int step = range < stepNm * CubicWidth ? 1 : stepNm;
+        int states = Math.Min(((range + step - 1) / step) + 1, ((WavelengthGrid.Count - 1) / step) + 1);
+        int start = Math.Min(bins[0], WavelengthGrid.Count - 1 - ((states - 1) * step));
+        Weights = new StateWeights(bins.Length, step == 1 ? 1 : CubicWidth);
+        bool[] isBright = lights.BrighterThan(step == 1 ? 0 : FaintShare);
+        var used = new bool[states];
         for (int i = 0; i < bins.Length; i++)
         {
-            if (_stepNm == 1)
-                (Weights.First[i], Weights.Weights[i]) = (bins[i] - _first, 1);
-            else
-                Weights.Interpolate(i, (double)(bins[i] - _first) / _stepNm, _states);
+            Weights.Interpolate(i, (double)(bins[i] - start) / step, states);
             if (isBright[i])
                 used.AsSpan(Weights.First[i], Weights.Width).Fill(true);
         }
 
-        Used = [.. Enumerable.Range(0, _states).Where(state => used[state])];
-        Bins = [.. Used.Select(state => _first + (state * _stepNm))];
+        int[] solved = [.. Enumerable.Range(0, states).Where(state => used[state])];
+        Bins = [.. solved.Select(state => start + (state * step))];
+
+        // From here on only the states that are solved count; those of a bright bin lie side by side among them too.
         for (int i = 0; i < bins.Length; i++)
         {
-            if (!isBright[i] && used.AsSpan(Weights.First[i], Weights.Width).Contains(false))
-                Weights.TakeNearest(i, (bins[i] - _first) / _stepNm, Used, _states);
+            if (isBright[i])
+                Weights.First[i] = Array.BinarySearch(solved, Weights.First[i]);
+            else
+                Weights.TakeNearest(i, bins[i], Bins);
         }
     }
 
     /// <summary>How bins draw on states.</summary>
     public StateWeights Weights { get; }
 
-    /// <summary>States, those that no bin draws on counted.</summary>
-    public int States => _states;
-
-    /// <summary>States that a bin draws on.</summary>
-    public int[] Used { get; }
-
-    /// <summary>Where they lie on the grid.</summary>
+    /// <summary>Where the states lie on the grid.</summary>
     public int[] Bins { get; }
 }
