@@ -36,6 +36,9 @@ internal sealed class AbsorptionAxis
 
     public int Nodes => _nodes.Length;
 
+    /// <summary>Largest of the last two Chebyshev coefficients of any number of the first table: what its polynomials may be wrong by.</summary>
+    public double Tail { get; private set; }
+
     /// <summary>The end of the range that holds an absorption.</summary>
     public static double RangeFor(double absorptionPerMm)
     {
@@ -48,9 +51,9 @@ internal sealed class AbsorptionAxis
     /// <summary>Absorption at the nodes, 1/mm.</summary>
     public double[] NodesPerMm() => [.. _nodes.Select(x => Math.Exp(_startLog + ((x + 1) * _halfLog)) - _offsetPerMm)];
 
-    /// <summary>Largest of the last two Chebyshev coefficients of any number: what the polynomial may be wrong by.</summary>
+    /// <summary>Sets <see cref="Tail"/>.</summary>
     /// <param name="answers">At [node × size + i].</param>
-    public double TailOf(ReadOnlySpan<double> answers)
+    public double Judge(ReadOnlySpan<double> answers)
     {
         int count = _nodes.Length, size = answers.Length / count;
         double tail = 0;
@@ -64,7 +67,7 @@ internal sealed class AbsorptionAxis
                 tail = coefficient is >= double.MinValue and <= double.MaxValue ? Math.Max(tail, Math.Abs(coefficient)) : double.PositiveInfinity;
         }
 
-        return tail;
+        return Tail = tail;
     }
 
     /// <summary>Weights of the nodes for each bin's absorption, by the barycentric formula.</summary>

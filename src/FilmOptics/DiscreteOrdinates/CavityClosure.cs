@@ -8,7 +8,7 @@ internal static class CavityClosure<T>
 {
     /// <summary>Rows by input, see <see cref="FilmPlan.Rows"/>.</summary>
     public static LaneMatrix<T> Close(
-        FilmPlan plan, StateSolver<T>.Lanes lanes, double bypassShare, bool edges, LayerPile<T> pile, LaneArena<T> arena)
+        FilmPlan plan, StateSolver<T>.Lanes lanes, double bypassShare, LayerPile<T> pile, LaneArena<T> arena)
     {
         int air = plan.AirCount, cells = plan.CellCount, inputs = cells + 3;
         int ports = pile.Outer.Rows - air;
@@ -43,7 +43,7 @@ internal static class CavityClosure<T>
             }
         }
 
-        int portOfLayer = 0;
+        int portOfLayer = PileBuilder<T>.Collectors;
         for (int layer = 0; layer < plan.Layers.Count; layer++)
         {
             var nodes = plan.Nodes[layer];
@@ -62,7 +62,7 @@ internal static class CavityClosure<T>
                     inside[port, input] = pile.Outer[air + port, air + portOfLayer + cell] * emitted;
             }
 
-            portOfLayer += plan.Cells[layer] + (edges ? 1 : 0);
+            portOfLayer += plan.Cells[layer];
         }
 
         // Light that arrives below and above for each input, and what of it the sheets above send back.
@@ -102,20 +102,18 @@ internal static class CavityClosure<T>
                 : atAbove - sentBack - (atAbove * lostAbove);
             bare[cells + 1, input] = atBelow * (T.All(1) - reflectBelow);
             bare[cells + 2, input] = atAbove * lostAbove;
-            T toEdges = default;
-            int port = 0;
+            bare[cells + 3, input] = Sum(inside, 1);
+            bare[cells + 4, input] = Sum(inside, 0);
+            int port = PileBuilder<T>.Collectors;
             for (int layer = 0; layer < plan.Layers.Count; layer++)
             {
-                T index = T.All(plan.Nodes[layer].Index), taken = index * lanes.Absorption(layer);
+                T taken = T.All(plan.Nodes[layer].Index) * lanes.Absorption(layer);
                 for (int cell = 0; cell < plan.Cells[layer]; cell++)
                     bare[plan.FirstCell[layer] + cell, input] = taken * Sum(inside, port++);
-                if (edges)
-                    toEdges += index * Sum(inside, port++);
             }
 
-            bare[cells + 3, input] = toEdges;
-            for (int row = cells + 4; row < plan.Rows; row++)
-                bare[row, input] = Sum(up, row - cells - 4);
+            for (int row = cells + FilmPlan.Ends; row < plan.Rows; row++)
+                bare[row, input] = Sum(up, row - cells - FilmPlan.Ends);
         }
 
         return bare;

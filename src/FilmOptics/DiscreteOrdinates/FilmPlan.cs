@@ -29,7 +29,7 @@ internal sealed class FilmPlan
         LayerOrdinates[] media = [air, .. Nodes, air];
         Faces = [.. Enumerable.Range(0, media.Length - 1).Select(face => OrdinateSet.Reflectance(media[face], media[face + 1]))];
 
-        Cells = [.. layers.Select(layer => layer.Emitters.Count > 0 ? effort.Cells : 1)];
+        Cells = [.. layers.Select(layer => layer.Emitters.Count > 0 ? effort.Cells : 0)];
         FirstCell = new int[layers.Count];
         for (int layer = 0; layer < layers.Count; layer++)
         {
@@ -67,7 +67,7 @@ internal sealed class FilmPlan
     /// <summary>Reflectance by node of each face, the first below the first layer.</summary>
     public double[][] Faces { get; }
 
-    /// <summary>Cells of each layer, and where they start among all.</summary>
+    /// <summary>Cells of each layer with dots, and where they start among all.</summary>
     public int[] Cells { get; }
 
     /// <inheritdoc cref="Cells"/>
@@ -98,8 +98,11 @@ internal sealed class FilmPlan
     /// <summary>Share that the sheets above send back of source light that missed the film, where it depends on angle.</summary>
     public double BypassReturn { get; }
 
-    /// <summary>Numbers per state and input: what each cell absorbs, then light above, lost below, above and at the edges, then radiances.</summary>
-    public int Rows => CellCount + 4 + (ViewBeam >= 0 ? AirCount : 0);
+    /// <summary>Where a photon may end outside the cells: above, lost below, in the sheets above, at the edges, in layers without dots.</summary>
+    public const int Ends = 5;
+
+    /// <summary>Numbers per state and input: what each cell absorbs, then the ends, then radiances.</summary>
+    public int Rows => CellCount + Ends + (ViewBeam >= 0 ? AirCount : 0);
 
     /// <summary>One source photon, then one emitted in each cell.</summary>
     public int Inputs => CellCount + 1;

@@ -19,7 +19,7 @@ internal sealed class FilmShape
         double longestMm = OpticalStates.SheetMm(film, layers);
         MayGuide = layers.Any(layer => layer.Emitters.Count > 0 && layer.Layer.Scattering.Samples.ContainsAnyInRange(0, GuidedLight<WideLanes>.OutOfReach / longestMm));
         int[] varying = [.. Enumerable.Range(0, layers.Count).Where(i => layers[i].Emitters.Count > 0 || !IsFlat(layers[i].Layer.HostAbsorption))];
-        VaryingLayer = !flat || MayGuide || varying.Length > 1 ? null : varying is [var only] ? only : 0;
+        VaryingLayer = !flat || MayGuide ? null : varying is [var only] ? only : null;
     }
 
     /// <summary>The one layer whose absorption is all that depends on the wavelength; null where more does.</summary>

@@ -44,7 +44,10 @@ internal sealed class FilmSolver(FilmLights lights, int layers)
         if (effort.StepNm > 1 && _axis is not null)
         {
             States = _axis.Nodes;
-            return Build(film, shape.Table(film, filmLayers, effort, _axis, cancellationToken), _weights!, _moments!, effort, model);
+            var quick = Build(film, shape.Table(film, filmLayers, effort, _axis, cancellationToken), _weights!, _moments!, effort, model);
+            if (shape.Suffices(_axis, quick.Budget.Unconverted + quick.Budget.Converted))
+                return quick;
+            _axis = null;
         }
 
         var axis = new WavelengthAxis(Lights, shape.Shape.MayGuide ? 1 : effort.StepNm);

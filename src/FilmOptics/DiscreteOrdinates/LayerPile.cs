@@ -1,7 +1,7 @@
 namespace FilmOptics.DiscreteOrdinates;
 
 /// <summary>Layers joined from the bottom up: what the pile so far does to light from outside, from its cells and from above.</summary>
-/// <remarks>Outer ports are the air below, then the ports of each layer, then the air above once the pile is closed.</remarks>
+/// <remarks>Outer ports are the air below, then what layers without dots absorb, then what the edges take, then the cells of the layers with dots.</remarks>
 internal readonly ref struct LayerPile<T>
     where T : struct, ILanes<T>
 {

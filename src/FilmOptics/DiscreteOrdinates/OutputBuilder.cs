@@ -21,7 +21,7 @@ internal sealed class OutputBuilder(Film film, FilmKernels kernels, FilmLights l
             first[emitter.Lot] += reemission.FirstIn(e);
         }
 
-        double host = 0;
+        double host = reemission.InEnd(4);
         for (int layer = 0; layer < _plan.Layers.Count; layer++)
             host += reemission.InHost(layer);
         int above = _plan.CellCount;
@@ -71,7 +71,7 @@ internal sealed class OutputBuilder(Film film, FilmKernels kernels, FilmLights l
             {
                 Array.Clear(_byState);
                 for (int j = 0; j < directions.Length; j++)
-                    AddRow(line, _plan.CellCount + 4 + j, directions[j]);
+                    AddRow(line, _plan.CellCount + FilmPlan.Ends + j, directions[j]);
                 AddLight(samples, line);
             }
 

@@ -4,6 +4,9 @@ namespace FilmOptics.DiscreteOrdinates;
 internal static class PileBuilder<T>
     where T : struct, ILanes<T>
 {
+    /// <summary>Ports behind those of air that every pile has: what layers without dots absorb, what the edges take.</summary>
+    public const int Collectors = 2;
+
     /// <summary>The air below, up to and with the face to the first layer.</summary>
     /// <param name="arena">Holds the result.</param>
     /// <param name="reflected">Share reflected at each node of air.</param>
@@ -11,8 +14,8 @@ internal static class PileBuilder<T>
     public static LayerPile<T> Bottom(LaneArena<T> arena, double[] reflected, int nodes)
     {
         int air = reflected.Length;
-        var outer = arena.TakeCleared(air, air);
-        var up = arena.TakeCleared(nodes, air);
+        var outer = arena.TakeCleared(air + Collectors, air + Collectors);
+        var up = arena.TakeCleared(nodes, air + Collectors);
         var back = arena.TakeCleared(nodes, nodes);
         for (int j = 0; j < nodes; j++)
         {
@@ -83,6 +86,20 @@ internal static class PileBuilder<T>
 
         arena.Release(mark);
         return new() { Outer = outer, Up = up, Back = back };
+    }
+
+    /// <summary>Adds what the last port takes to a collector, and drops the port.</summary>
+    /// <param name="pile">The pile; its collector changes.</param>
+    /// <param name="collector">Position among the outer ports.</param>
+    /// <param name="factor">What a photon's fluence in the port counts.</param>
+    public static LayerPile<T> Fold(LayerPile<T> pile, int collector, T factor)
+    {
+        int last = pile.Outer.Rows - 1, nodes = pile.Up.Rows;
+        for (int port = 0; port < last; port++)
+            pile.Outer[collector, port] = pile.Outer[port, collector] = pile.Outer[collector, port] + (factor * pile.Outer[last, port]);
+        for (int j = 0; j < nodes; j++)
+            pile.Up[j, collector] += factor * pile.Up[j, last];
+        return new() { Outer = pile.Outer.Block(0, 0, last, last), Up = pile.Up.Block(0, 0, nodes, last), Back = pile.Back };
     }
 
     /// <summary>The pile with a layer on it.</summary>

@@ -62,7 +62,7 @@ internal sealed class Reemission
         }
     }
 
-    /// <summary>Photons that end in a row of the plan's four ends: above, below, in the sheets above, at the edges.</summary>
+    /// <summary>Photons that end in one of <see cref="FilmPlan.Ends"/>.</summary>
     public double InEnd(int end)
     {
         double sum = _sums[0][end * _plan.Inputs];
@@ -71,7 +71,7 @@ internal sealed class Reemission
         return sum;
     }
 
-    /// <summary>Photons that a layer's host absorbs.</summary>
+    /// <summary>Photons that the host of a layer with dots absorbs.</summary>
     public double InHost(int layer)
     {
         int channel = _spectra.ChannelOfHost(layer);
@@ -109,7 +109,7 @@ internal sealed class Reemission
     private (int First, int Count) RowsOf(int channel)
     {
         if (channel == 0)
-            return (_plan.CellCount, 4);
+            return (_plan.CellCount, FilmPlan.Ends);
         int emitters = _lights.Emitters.Length;
         int layer = channel <= emitters ? _lights.Emitters[channel - 1].Layer : channel - 1 - emitters;
         return (_plan.FirstCell[layer], _plan.Cells[layer]);

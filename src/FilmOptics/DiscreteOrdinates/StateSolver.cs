@@ -18,19 +18,23 @@ internal static class StateSolver<T>
         FilmPlan plan, OpticalStates states, double bypassShare, double longestFlightMm, Span<double> answers, CancellationToken cancellationToken)
     {
         int size = plan.Rows * plan.Inputs;
-        var arena = LaneArena<T>.Rent();
+        LaneArena<T> arena = LaneArena<T>.Rent(), one = LaneArena<T>.Rent(), other = LaneArena<T>.Rent();
         for (int first = 0; first < states.Count; first += T.Count)
         {
             cancellationToken.ThrowIfCancellationRequested();
             var mark = arena.Mark();
             var lanes = new Lanes(states, first);
-            var pile = Pile(plan, lanes, longestFlightMm, arena);
-            var closed = CavityClosure<T>.Close(plan, lanes, bypassShare, double.IsFinite(longestFlightMm), pile, arena);
+            var pile = Pile(plan, lanes, longestFlightMm, arena, one, other);
+            var closed = CavityClosure<T>.Close(plan, lanes, bypassShare, pile, arena);
             Scatter(closed, answers[(first * size)..], Math.Min(T.Count, states.Count - first), size);
             arena.Release(mark);
+            one.Release((0, 0));
+            other.Release((0, 0));
         }
 
         LaneArena<T>.Return(arena);
+        LaneArena<T>.Return(one);
+        LaneArena<T>.Return(other);
     }
 
     // Lanes lie side by side; each state's answers lie together.
@@ -50,17 +54,20 @@ internal static class StateSolver<T>
         }
     }
 
-    private static LayerPile<T> Pile(FilmPlan plan, Lanes lanes, double longestFlightMm, LaneArena<T> arena)
+    // Each step needs the pile before it and no other: two arenas take turns, however many layers there are.
+    private static LayerPile<T> Pile(FilmPlan plan, Lanes lanes, double longestFlightMm, LaneArena<T> arena, LaneArena<T> here, LaneArena<T> next)
     {
-        int layers = plan.Layers.Count;
+        int layers = plan.Layers.Count, host = plan.AirCount, edge = plan.AirCount + 1;
         bool edges = double.IsFinite(longestFlightMm);
         var edgeLoss = edges ? GuidedLight<T>.EdgeLoss(plan, lanes, longestFlightMm, arena) : default;
-        var pile = PileBuilder<T>.Bottom(arena, plan.Faces[0], plan.Nodes[0].Count);
+        here.Release((0, 0));
+        var pile = PileBuilder<T>.Bottom(here, plan.Faces[0], plan.Nodes[0].Count);
         for (int layer = 0; layer < layers; layer++)
         {
             var nodes = plan.Nodes[layer];
             if (layer > 0)
-                pile = PileBuilder<T>.Face(arena, pile, plan.Faces[layer], nodes.Count);
+                Step(PileBuilder<T>.Face(next, pile, plan.Faces[layer], nodes.Count), ref pile, ref here, ref next);
+            var mark = arena.Mark();
             T scattering = lanes.Scattering(layer);
             LaneMatrix<T> even = default, odd = default;
             if (plan.Layers[layer].Scatters)
@@ -79,11 +86,26 @@ internal static class StateSolver<T>
                 Even = even,
                 Odd = odd,
             };
-            var block = LayerBuilder<T>.Build(arena, nodes, optics, plan.Layers[layer].ThicknessMm, plan.Cells[layer]);
-            pile = PileBuilder<T>.Layer(arena, pile, block);
+            var block = LayerBuilder<T>.Build(arena, nodes, optics, plan.Layers[layer].ThicknessMm, Math.Max(1, plan.Cells[layer]));
+            Step(PileBuilder<T>.Layer(next, pile, block), ref pile, ref here, ref next);
+            T index = T.All(nodes.Index);
+            if (edges)
+                pile = PileBuilder<T>.Fold(pile, edge, index);
+            if (plan.Cells[layer] == 0)
+                pile = PileBuilder<T>.Fold(pile, host, index * lanes.Absorption(layer));
+            arena.Release(mark);
         }
 
-        return PileBuilder<T>.Face(arena, pile, plan.Faces[layers], plan.AirCount);
+        return PileBuilder<T>.Face(next, pile, plan.Faces[layers], plan.AirCount);
+    }
+
+    private static void Step(LayerPile<T> stepped, ref LayerPile<T> pile, ref LaneArena<T> here, ref LaneArena<T> next)
+    {
+        if (Unsafe.AreSame(ref stepped.Outer.First, ref pile.Outer.First))
+            return;
+        here.Release((0, 0));
+        (here, next) = (next, here);
+        pile = stepped;
     }
 
     /// <summary>The properties of the states in the lanes.</summary>

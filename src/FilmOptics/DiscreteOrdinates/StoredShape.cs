@@ -8,6 +8,9 @@ namespace FilmOptics.DiscreteOrdinates;
 /// <param name="largestTailShare">What a table's polynomials may leave out.</param>
 internal sealed class StoredShape(FilmShape shape, bool withAngles, double largestTailShare)
 {
+    // Sums over a spectrum miss about a twentieth of the tail (measured); where little light leaves, that much may change its colour.
+    private const double TailPerLight = 100;
+
     // a₀ × thickness and nodes, tried in this order: most films are smooth on the first, bright cavities and clear hosts on a later one.
     private static readonly (double OffsetDepth, int Nodes)[] Axes = [(0.03, 16), (0.03, 24), (0.003, 32), (0.0003, 40)];
 
@@ -40,7 +43,7 @@ internal sealed class StoredShape(FilmShape shape, bool withAngles, double large
         {
             var axis = new AbsorptionAxis(varying, range, offsetDepth / layers[varying].ThicknessMm, nodes);
             var table = Solve(film, layers, Plan(film, layers, effort), axis, cancellationToken);
-            if (axis.TailOf(table.Answers) > largestTailShare)
+            if (axis.Judge(table.Answers) > largestTailShare)
                 continue;
             _tables.TryAdd((effort, axis), table);
             found = axis;
@@ -49,6 +52,11 @@ internal sealed class StoredShape(FilmShape shape, bool withAngles, double large
 
         return _axes.GetOrAdd(range, found);
     }
+
+    /// <summary>Whether a table is good enough for the colour of so little light.</summary>
+    /// <param name="axis">Its axis.</param>
+    /// <param name="lightShare">Light that leaves above, per source photon.</param>
+    public bool Suffices(AbsorptionAxis axis, double lightShare) => axis.Tail <= TailPerLight * largestTailShare * lightShare;
 
     /// <summary>The table over an axis.</summary>
     public FilmKernels Table(
