@@ -24,11 +24,14 @@ internal static class FilmModels
     public static IEnumerable<string> Names => [DiscreteOrdinates, BeerLambert, MonteCarlo];
 
     /// <summary>A fresh model.</summary>
-    public static IFilmModel Named(string name, ModelSettings settings) => name switch
+    /// <param name="name">One of <see cref="Names"/>.</param>
+    /// <param name="settings">What is asked of it.</param>
+    /// <param name="progress">Told how far a traced run has come.</param>
+    public static IFilmModel Named(string name, ModelSettings settings, IProgress<TracingProgress>? progress = null) => name switch
     {
         DiscreteOrdinates => new DiscreteOrdinatesModel(settings.AccuracyShare ?? DefaultAccuracyShare, settings.Angles),
         BeerLambert => new BeerLambertModel(),
-        MonteCarlo => new PhotonTracingModel(settings.Photons ?? DefaultPhotons, settings.Seed ?? 1),
+        MonteCarlo => new PhotonTracingModel(settings.Photons ?? DefaultPhotons, settings.Seed ?? 1, progress: progress),
         _ => throw new ArgumentException(name, nameof(name)),
     };
 }

@@ -6,8 +6,9 @@ namespace Dotcoat;
 /// <summary>What a computing command was asked for.</summary>
 /// <param name="Overrides">KEY=VALUE of --set, in order.</param>
 /// <param name="Model">The model to run.</param>
+/// <param name="News">How far a traced run of the model has come.</param>
 /// <param name="Delivery">How the result is wanted.</param>
-internal sealed record FilmRequest(IReadOnlyList<string> Overrides, IFilmModel Model, DeliveryRequest Delivery);
+internal sealed record FilmRequest(IReadOnlyList<string> Overrides, IFilmModel Model, TracingNews News, DeliveryRequest Delivery);
 
 /// <summary>What a command that runs every model was asked for.</summary>
 /// <param name="Overrides">KEY=VALUE of --set, in order.</param>
@@ -62,10 +63,11 @@ internal sealed class FilmOptions
     public ComparisonRequest ReadAllModels(ParseResult parsed) =>
         new(parsed.GetValue(_set) ?? [], _model.Read(parsed), _delivery.Read(parsed));
 
-    public FilmRequest Read(ParseResult parsed) => new(
-        parsed.GetValue(_set) ?? [],
-        FilmModels.Named(_model.NameIn(parsed), _model.Read(parsed)),
-        _delivery.Read(parsed));
+    public FilmRequest Read(ParseResult parsed)
+    {
+        var news = new TracingNews();
+        return new(parsed.GetValue(_set) ?? [], FilmModels.Named(_model.NameIn(parsed), _model.Read(parsed), news), news, _delivery.Read(parsed));
+    }
 }
 
 /// <summary>--json and --out.</summary>

@@ -26,14 +26,18 @@ internal static class SimulateCommand
         var appraisal = Progress.While(
             context,
             "solving the film",
-            () => extras.AddTo(FilmAppraiser.Appraise(filmCase, request.Model.Solve(filmCase.Film, context.CancellationToken)), filmCase, context.CancellationToken));
+            () => extras.AddTo(FilmAppraiser.Appraise(filmCase, request.Model.Solve(filmCase.Film, context.CancellationToken)), filmCase, context.CancellationToken),
+            request.News);
+
+        // What was traced before an interruption is a result, with the errors that go with it.
+        bool isCutShort = appraisal.Output.Tracing is { } tracing && tracing.Photons < tracing.PhotonsAsked;
         Delivery.Deliver(
-            context,
+            isCutShort ? context with { CancellationToken = CancellationToken.None } : context,
             "simulate",
             ReportJson.Simulate(filmCase, appraisal),
             () => FilmText.Simulated(filmCase, appraisal),
             request.Delivery,
             () => Charts.Of(filmCase, appraisal));
-        return ExitStatus.Done;
+        return isCutShort ? ExitStatus.Interrupted : ExitStatus.Done;
     }
 }

@@ -13,6 +13,8 @@ internal sealed record TracedExtrasRequest(int? HazeNm, double? ZoneMm)
     /// <summary>The appraisal with what was asked for.</summary>
     public FilmAppraisal AddTo(FilmAppraisal appraisal, FilmCase filmCase, CancellationToken cancellationToken)
     {
+        if (appraisal.Output.Tracing is not null && cancellationToken.IsCancellationRequested && (HazeNm ?? ZoneMm) is not null)
+            return appraisal with { Warnings = [.. appraisal.Warnings, "--haze-nm and --zone-mm were not traced: the run was interrupted before them."] };
         if (HazeNm is { } hazeNm)
             appraisal = appraisal with { Haze = new TracedHazeMeter().Read(filmCase.Film, hazeNm, cancellationToken) };
         if (ZoneMm is not { } zoneMm)

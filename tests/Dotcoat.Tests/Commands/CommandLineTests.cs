@@ -1,3 +1,6 @@
+using System.Text.Json.Nodes;
+using FilmOptics;
+
 namespace Dotcoat.Tests.Commands;
 
 public sealed class CommandLineTests
@@ -70,18 +73,33 @@ public sealed class CommandLineTests
     }
 
     [Fact]
-    public async Task InterruptedInTheMiddle_LeavesNothing()
+    public async Task TracingInterrupted_KeepsWhatWasTracedAndSaysSo()
     {
         using var workshop = Workshop.WithDemo();
-        var before = workshop.Files();
         using var stop = new CancellationTokenSource();
-        var run = Task.Run(() => workshop.Run(stop.Token, "simulate", Film, "--model", "monte-carlo", "--json", "--out", "result"), TestContext.Current.CancellationToken);
-        await Task.Delay(TimeSpan.FromMilliseconds(200), TestContext.Current.CancellationToken);
+        var run = Task.Run(
+            () => workshop.Run(stop.Token, "simulate", Film, "--model", "monte-carlo", "--photons", "100000000000", "--zone-mm", "20", "--json", "--out", "result"),
+            TestContext.Current.CancellationToken);
+        await Task.Delay(TimeSpan.FromSeconds(2), TestContext.Current.CancellationToken);
         await stop.CancelAsync();
         var outcome = await run;
         Assert.Equal(130, outcome.Status);
-        Assert.Equal("", outcome.Output);
-        Assert.Equal(before, workshop.Files());
+        Assert.Equal(outcome.Output, workshop.Read("result/simulate.json"));
+        var document = JsonNode.Parse(outcome.Output)!;
+        Assert.Equal(1, (double)document["photons"]!["sum"]!, 1e-9);
+        Assert.InRange((double)document["standard_error"]!["converted"]!, 1e-6, 0.1);
+        string[] warnings = [.. document["warnings"]!.AsArray().Select(warning => (string)warning!)];
+        Assert.Contains(warnings, warning => warning.Contains("interrupted", StringComparison.OrdinalIgnoreCase) && warning.Contains("100,000,000,000", StringComparison.Ordinal));
+        Assert.Contains(warnings, warning => warning.Contains("--zone-mm", StringComparison.Ordinal));
+    }
+
+    [Fact]
+    public void TracingNews_SayHowFarAndHowSure()
+    {
+        var news = new TracingNews();
+        Assert.Equal("", news.ToString());
+        news.Report(new TracingProgress(1_000_000, 4_000_000, 0.00021));
+        Assert.Equal("25 % of 4,000,000 photons, standard error 0.021 % so far; Ctrl-C keeps what is traced", news.ToString());
     }
 
     [Theory]

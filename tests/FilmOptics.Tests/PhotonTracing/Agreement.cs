@@ -5,11 +5,11 @@ internal static class Agreement
 {
     public const double AllowedErrors = 4;
 
-    public static void AssertWithin(double expected, double expectedError, double found, double foundError, string what)
+    public static void AssertWithin(double expected, double expectedError, double found, double foundError, string what, double allowedErrors = AllowedErrors)
     {
         double error = Math.Sqrt((expectedError * expectedError) + (foundError * foundError));
         Assert.True(
-            Math.Abs(found - expected) <= AllowedErrors * error,
+            Math.Abs(found - expected) <= allowedErrors * error,
             $"{what}: {found:g8} ± {foundError:g2} against {expected:g8} ± {expectedError:g2}, {(found - expected) / error:+0.0;-0.0} combined standard errors.");
     }
 
