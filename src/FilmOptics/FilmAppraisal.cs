@@ -48,6 +48,9 @@ public sealed record FilmAppraisal
     /// <summary>How far light strays per colour, where a zone was asked for.</summary>
     public IReadOnlyList<ColourSpread>? Spread { get; init; }
 
+    /// <summary>Light near the cut edge of the sheet, where it was asked for.</summary>
+    public SheetEdge? Edge { get; init; }
+
     /// <summary>Warnings of the reader, the model and the appraisal, in that order.</summary>
     public required IReadOnlyList<string> Warnings { get; init; }
 }

@@ -60,6 +60,8 @@ public static class ReportJson
             Haze(json, haze);
         if (appraisal is { Zone: { } zone, Spread: { } spread })
             Zone(json, zone, spread);
+        if (appraisal.Edge is { } edge)
+            Edge(json, edge);
         json.WriteStartArray("warnings");
         foreach (string warning in appraisal.Warnings)
             json.WriteStringValue(warning);
@@ -264,6 +266,21 @@ public static class ReportJson
         List(json, "luminance_error", zone.Points.Select(p => (double?)p.LuminanceErrorShare));
         List(json, "u_prime", zone.Points.Select(p => p.Chromaticity?.UPrime));
         List(json, "v_prime", zone.Points.Select(p => p.Chromaticity?.VPrime));
+        json.WriteEndObject();
+    }
+
+    private static void Edge(Utf8JsonWriter json, SheetEdge edge)
+    {
+        json.WriteStartObject("edge_loss");
+        Number(json, "width_mm", edge.LostWidthMm);
+        Number(json, "width_error_mm", edge.LostWidthErrorMm);
+        json.WriteEndObject();
+        json.WriteStartObject("edge");
+        List(json, "distance_mm", edge.Bands.Select(band => (double?)band.DistanceMm));
+        List(json, "photons", edge.Bands.Select(band => (double?)band.Photons));
+        List(json, "photons_error", edge.Bands.Select(band => (double?)band.PhotonsError));
+        List(json, "u_prime", edge.Bands.Select(band => band.Chromaticity?.UPrime));
+        List(json, "v_prime", edge.Bands.Select(band => band.Chromaticity?.VPrime));
         json.WriteEndObject();
     }
 

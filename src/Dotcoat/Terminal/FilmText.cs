@@ -69,6 +69,14 @@ internal static class FilmText
                 [.. zone.Points.Where((_, i) => i % 8 == 0).Select(p => new[] { Figure.Fixed(p.DistanceMm, 2), Figure.Digits(p.LuminanceShare, 3), Figure.Fixed(p.Chromaticity?.UPrime, 4), Figure.Fixed(p.Chromaticity?.VPrime, 4) })]);
         }
 
+        if (appraisal.Edge is { } edge)
+        {
+            text.Gap().Table(
+                ["near the cut edge, mm from it", "photons above per source photon", "u′", "v′"],
+                [.. edge.Bands.Where((_, i) => i % 5 == 0).Select(band => new[] { Figure.Fixed(band.DistanceMm, 2), Figure.Fixed(band.Photons, 4), Figure.Fixed(band.Chromaticity?.UPrime, 4), Figure.Fixed(band.Chromaticity?.VPrime, 4) })]);
+            text.Table(["lost at the cut", $"as much as {Figure.Digits(edge.LostWidthMm, 3)} mm of backlight along it emit"], []);
+        }
+
         if (appraisal.Gamut is { Count: > 0 } gamut)
         {
             text.Gap().Table(

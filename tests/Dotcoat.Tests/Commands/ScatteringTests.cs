@@ -102,7 +102,21 @@ public sealed class ScatteringTests
         Assert.Equal(3, document["spread"]!.AsArray().Count);
     }
 
+    [Fact]
+    public void Edge_OfTheSheet_IsDarkerThanItsMiddle()
+    {
+        using var workshop = Workshop.WithDemo();
+        var document = JsonNode.Parse(workshop.Run("simulate", Monitor, "--edge-mm", "10", "--json").AssertDone().Output)!;
+        double[] photons = [.. document["edge"]!["photons"]!.AsArray().Select(p => (double)p!)];
+        double above = (double)document["photons"]!["unconverted"]! + (double)document["photons"]!["converted"]!;
+        Assert.True(photons[0] < 0.97 * above, $"{photons[0]} at the cut, {above} in the middle");
+        Assert.Equal(above, photons[^1], 0.03);
+        Assert.InRange((double)document["edge_loss"]!["width_mm"]!, 0.001, 1);
+        Assert.Contains("lost at the cut", workshop.Run("simulate", Monitor, "--edge-mm", "10").AssertDone().Output, StringComparison.Ordinal);
+    }
+
     [Theory]
+    [InlineData("--edge-mm", "-1", "above 0")]
     [InlineData("--haze-nm", "300", "from 360 to 830")]
     [InlineData("--zone-mm", "0", "above 0")]
     public void TracedExtras_OutOfRange_AreRefused(string option, string value, string message)
