@@ -94,6 +94,7 @@ internal static class CommandLine
             ReportCommand.Create(context),
             ScatterFromHazeCommand.Create(context),
             StartCommand.Create(context),
+            DeskCommand.Create(context),
         };
         foreach (var option in root.Options)
         {

@@ -22,11 +22,21 @@ public static class FilmFile
     /// <param name="path">Its file: names it in messages, and paths in the text are relative to its folder.</param>
     /// <param name="overrides">KEY=VALUE as --set takes them; later ones win.</param>
     /// <exception cref="InputException">All faults, with file, line and column.</exception>
-    public static FilmCase Parse(string yamlText, string path, IReadOnlyList<string> overrides)
+    public static FilmCase Parse(string yamlText, string path, IReadOnlyList<string> overrides) =>
+        Parse(yamlText, path, overrides, new SpectrumShelf());
+
+    /// <summary>The same, for one who reads a film again and again with other overrides.</summary>
+    /// <param name="yamlText">The text.</param>
+    /// <param name="path">Its file.</param>
+    /// <param name="overrides">KEY=VALUE as --set takes them; later ones win.</param>
+    /// <param name="shelf">Spectra that were read before.</param>
+    /// <exception cref="InputException">All faults, with file, line and column.</exception>
+    public static FilmCase Parse(string yamlText, string path, IReadOnlyList<string> overrides, SpectrumShelf shelf)
     {
         ArgumentNullException.ThrowIfNull(yamlText);
         ArgumentNullException.ThrowIfNull(path);
         ArgumentNullException.ThrowIfNull(overrides);
+        ArgumentNullException.ThrowIfNull(shelf);
         var faults = new FaultList(path);
         var root = NodeComposer.Compose(yamlText, new(path, 1, 1), faults);
         if (root is null)
@@ -37,7 +47,7 @@ public static class FilmFile
                 change.ApplyTo(mapping, faults);
         }
 
-        var filmCase = new FilmReader(Path.GetDirectoryName(path) ?? "", faults).Read(root!, TitleOf(path));
+        var filmCase = new FilmReader(Path.GetDirectoryName(path) ?? "", shelf, faults).Read(root!, TitleOf(path));
         faults.ThrowIfAny();
         return filmCase ?? throw new InvalidOperationException("A film file was refused without a reason.");
     }
@@ -61,6 +71,29 @@ public static class FilmFile
         ArgumentNullException.ThrowIfNull(solved);
         ArgumentNullException.ThrowIfNull(newPath);
         return new SolutionText(yamlText, path, new(path)).With(overrides, solved, newPath);
+    }
+
+    /// <summary>The text of a film file, without a byte order mark.</summary>
+    /// <param name="path">The film file.</param>
+    /// <exception cref="InputException">It is missing, unreadable, too large or not UTF-8 text.</exception>
+    public static string ReadText(string path)
+    {
+        ArgumentNullException.ThrowIfNull(path);
+        return FilmText.Read(path);
+    }
+
+    /// <summary>Every single value that the text writes, under the key that --set takes, with its place.</summary>
+    /// <param name="yamlText">The text.</param>
+    /// <param name="path">Its file, for messages.</param>
+    /// <exception cref="InputException">The text is no YAML that a film file may hold.</exception>
+    public static IReadOnlyList<WrittenValue> Values(string yamlText, string path)
+    {
+        ArgumentNullException.ThrowIfNull(yamlText);
+        ArgumentNullException.ThrowIfNull(path);
+        var faults = new FaultList(path);
+        var root = NodeComposer.Compose(yamlText, new(path, 1, 1), faults);
+        faults.ThrowIfAny();
+        return WrittenValues.Of(root!);
     }
 
     private static string TitleOf(string path)

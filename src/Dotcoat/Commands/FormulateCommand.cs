@@ -27,13 +27,14 @@ internal static class FormulateCommand
         if (request.Model is PhotonTracingModel)
             throw new InputException(new InputFault("--model", null, null, $"{request.Model.Name} has noise, which a search for loadings cannot follow; formulate with another model and check the film with simulate --model {request.Model.Name}."));
         string path = context.PathOf(file);
-        var saved = save is null ? null : SavedFilm.Plan(path, context.PathOf(save), request.Overrides);
-        var filmCase = FilmFile.Load(path, request.Overrides);
+        string text = FilmFile.ReadText(path);
+        var saved = save is null ? null : SavedFilm.Plan(text, path, context.PathOf(save), request.Overrides);
+        var filmCase = FilmFile.Parse(text, path, request.Overrides);
         if (filmCase.Target is null)
             throw new InputException(new InputFault(file, null, null, "has no target: formulate needs one (key target, with white_xy)."));
         var formulation = Progress.While(
             context, "searching loadings", () => LoadingSolver.Formulate(filmCase, request.Model, context.CancellationToken));
-        saved?.Write(formulation, context.CancellationToken);
+        saved?.Write(formulation.FilmCase.Film, context.CancellationToken);
         Delivery.Deliver(
             context,
             "formulate",

@@ -19,10 +19,7 @@ internal static class FilmText
     public static string Formulated(Formulation formulation)
     {
         var text = new TerminalText();
-        string tolerance = Figure.Digits(formulation.FilmCase.Target!.ToleranceXy, 3);
-        text.Paragraph(formulation.Reached
-            ? $"White is on target: {Figure.Fixed(formulation.WhiteErrorXy, 5)} in xy from it (tolerance {tolerance})."
-            : $"{formulation.Limit} That is {Figure.Fixed(formulation.WhiteErrorXy, 4)} in xy from the target (tolerance {tolerance}).");
+        text.Paragraph(Outcome(formulation));
         text.Gap().Table(
             ["recipe", "layer", "mg/mL"],
             [.. formulation.Loadings.Select(l => new[] { l.LotName, l.LayerName, Figure.Fixed(l.LoadingMgPerMl, 4) })]);
@@ -30,28 +27,41 @@ internal static class FilmText
         return Rest(text, formulation.FilmCase, formulation.Appraisal);
     }
 
-    private static string Rest(TerminalText text, FilmCase filmCase, FilmAppraisal appraisal)
+    /// <summary>Whether a formulation reached its target, and if not, why and what to do.</summary>
+    public static string Outcome(Formulation formulation)
     {
-        text.Paragraph($"Film: {filmCase.Film.Title}. Model: {appraisal.Output.Model}. Observer: {filmCase.Observer.Name}.");
-        text.Gap().Table(["colour", "x", "y", "u′", "v′", "CCT K", "Duv", "lm/W"], [.. Whites.Rows(appraisal)]);
-        text.Gap().Table(["where each source photon goes", "share"], [.. Fates(filmCase, appraisal.Output.Budget)]);
-        text.Gap().Table(["efficiency", "share"], [.. Efficiencies(appraisal.Efficiency)]);
-        text.Gap().Table(
+        string tolerance = Figure.Digits(formulation.FilmCase.Target!.ToleranceXy, 3);
+        return formulation.Reached
+            ? $"White is on target: {Figure.Fixed(formulation.WhiteErrorXy, 5)} in xy from it (tolerance {tolerance})."
+            : $"{formulation.Limit} That is {Figure.Fixed(formulation.WhiteErrorXy, 4)} in xy from the target (tolerance {tolerance}).";
+    }
+
+    /// <summary>A film's figures as every door of the program shows them.</summary>
+    public static IEnumerable<FigureTable> Tables(FilmCase filmCase, FilmAppraisal appraisal)
+    {
+        yield return new("colours", ["colour", "x", "y", "u′", "v′", "CCT K", "Duv", "lm/W"], [.. Whites.Rows(appraisal)]);
+        yield return new("fates", ["where each source photon goes", "share"], [.. Fates(filmCase, appraisal.Output.Budget)]);
+        yield return new("efficiency", ["efficiency", "share"], [.. Efficiencies(appraisal.Efficiency)]);
+        yield return new(
+            "bands",
             ["light above by last emitter", "photons", "peak nm", "FWHM nm"],
             [.. appraisal.Bands.Select(b => new[] { b.Name, Figure.Fixed(b.Photons, 4), Figure.Fixed(b.PeakNm, 1), Figure.Fixed(b.FwhmNm, 1) })]);
-        text.Gap().Table(
+        yield return new(
+            "layers",
             ["layer", "thickness µm", "coat g/m²", "optical density"],
             [.. appraisal.Layers.Select(l => new[] { l.Name, Figure.Fixed(l.ThicknessUm, 1), Figure.Fixed(l.CoatWeightGPerM2, 1), Figure.Fixed(l.OpticalDensity, 3) })]);
         if (appraisal.Output.Angles is { } angles)
         {
-            text.Gap().Table(
+            yield return new(
+                "angles",
                 ["bare film, exit angle °", "luminance", "u′", "v′"],
                 [.. AngularColour.Of(angles, filmCase.Observer).Select(a => new[] { Figure.Fixed(a.AngleDeg, 0), Figure.Fixed(a.RelativeLuminance, 3), Figure.Fixed(a.Chromaticity?.UPrime, 4), Figure.Fixed(a.Chromaticity?.VPrime, 4) })]);
         }
 
         if (appraisal.Haze is { } haze)
         {
-            text.Gap().Table(
+            yield return new(
+                "haze",
                 [$"haze meter at {haze.WavelengthNm} nm, bare film", "share", "standard error"],
                 [
                     ["total transmittance", Figure.Fixed(haze.TotalTransmittanceShare, 4), Figure.Digits(haze.TotalTransmittanceErrorShare, 1)],
@@ -61,29 +71,39 @@ internal static class FilmText
 
         if (appraisal is { Zone: { } zone, Spread: { } spread })
         {
-            text.Gap().Table(
+            yield return new(
+                "spread",
                 ["light strays, from a point", "50 % within mm", "90 % within mm"],
                 [.. spread.Select(s => new[] { s.Name, Figure.Digits(s.Radius50Mm, 3), Figure.Digits(s.Radius90Mm, 3) })]);
-            text.Gap().Table(
+            yield return new(
+                "zone",
                 [$"one lit zone of {Figure.Digits(zone.ZoneMm, 4)} mm, mm from its centre", "luminance", "u′", "v′"],
                 [.. zone.Points.Where((_, i) => i % 8 == 0).Select(p => new[] { Figure.Fixed(p.DistanceMm, 2), Figure.Digits(p.LuminanceShare, 3), Figure.Fixed(p.Chromaticity?.UPrime, 4), Figure.Fixed(p.Chromaticity?.VPrime, 4) })]);
         }
 
         if (appraisal.Edge is { } edge)
         {
-            text.Gap().Table(
+            yield return new(
+                "edge",
                 ["near the cut edge, mm from it", "photons above per source photon", "u′", "v′"],
                 [.. edge.Bands.Where((_, i) => i % 5 == 0).Select(band => new[] { Figure.Fixed(band.DistanceMm, 2), Figure.Fixed(band.Photons, 4), Figure.Fixed(band.Chromaticity?.UPrime, 4), Figure.Fixed(band.Chromaticity?.VPrime, 4) })]);
-            text.Table(["lost at the cut", $"as much as {Figure.Digits(edge.LostWidthMm, 3)} mm of backlight along it emit"], []);
+            yield return new("edge-loss", ["lost at the cut", $"as much as {Figure.Digits(edge.LostWidthMm, 3)} mm of backlight along it emit"], []);
         }
 
         if (appraisal.Gamut is { Count: > 0 } gamut)
         {
-            text.Gap().Table(
+            yield return new(
+                "gamut",
                 ["panel against", "coverage xy", "coverage u′v′", "area ratio xy", "area ratio u′v′"],
                 [.. gamut.Select(g => new[] { g.Name, Figure.Fixed(g.CoverageXy, 4), Figure.Fixed(g.CoverageUv, 4), Figure.Fixed(g.AreaRatioXy, 4), Figure.Fixed(g.AreaRatioUv, 4) })]);
         }
+    }
 
+    private static string Rest(TerminalText text, FilmCase filmCase, FilmAppraisal appraisal)
+    {
+        text.Paragraph($"Film: {filmCase.Film.Title}. Model: {appraisal.Output.Model}. Observer: {filmCase.Observer.Name}.");
+        foreach (var table in Tables(filmCase, appraisal))
+            text.Gap().Table(table.Header, table.Rows);
         return text.Sentences("Warnings", appraisal.Warnings).Sentences("Cautions", Cautions.For(filmCase, appraisal)).ToString();
     }
 
@@ -109,3 +129,9 @@ internal static class FilmText
         yield return ["energy efficiency", Figure.Fixed(efficiency.EnergyShare, 4)];
     }
 }
+
+/// <summary>A table of figures.</summary>
+/// <param name="Name">Which table, for those who pick one.</param>
+/// <param name="Header">Headings.</param>
+/// <param name="Rows">Cells, as many as headings.</param>
+internal sealed record FigureTable(string Name, IReadOnlyList<string> Header, IReadOnlyList<IReadOnlyList<string>> Rows);

@@ -10,11 +10,11 @@ internal sealed class FilmReader
     private readonly SpectrumLoader _loader;
     private readonly FilmParts _parts;
 
-    public FilmReader(string folder, FaultList faults)
+    public FilmReader(string folder, SpectrumShelf shelf, FaultList faults)
     {
         _faults = faults;
         _parts = new(faults);
-        _loader = new(folder, faults, _warnings);
+        _loader = new(folder, shelf, faults, _warnings);
     }
 
     /// <summary>Every scalar of the tree that names a spectrum file.</summary>

@@ -81,7 +81,7 @@ internal static class KeyPath
     }
 
     // Dots go by their lot's name, free loadings by the lot's name alone or in a mapping.
-    private static string? NameOf(Node item) => item is MappingNode mapping
+    internal static string? NameOf(Node item) => item is MappingNode mapping
         ? ((mapping.Find("name") ?? mapping.Find("lot"))?.Value as ScalarNode)?.Text
         : item is ScalarNode scalar && !Section.TryNumber(item, out _) ? scalar.Text : null;
 }

@@ -96,7 +96,7 @@ internal sealed class SolutionText(string text, string path, FaultList faults)
         string oldFolder = Path.GetDirectoryName(Path.GetFullPath(path))!, newFolder = Path.GetDirectoryName(Path.GetFullPath(newPath))!;
         if (oldFolder == newFolder)
             return [];
-        var reader = new FilmReader(Path.GetDirectoryName(path) ?? "", faults);
+        var reader = new FilmReader(Path.GetDirectoryName(path) ?? "", new SpectrumShelf(), faults);
         reader.Read(root, "");
         faults.ThrowIfAny();
         return [.. from name in reader.FileNames

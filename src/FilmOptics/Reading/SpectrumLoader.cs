@@ -2,15 +2,14 @@ using Colorimetry;
 
 namespace FilmOptics.Reading;
 
-/// <summary>Brings the spectra that a film file names onto the grid. Each file is read once.</summary>
-internal sealed class SpectrumLoader(string folder, FaultList faults, List<string> warnings)
+/// <summary>Brings the spectra that a film file names onto the grid. Each file is read once for a shelf.</summary>
+internal sealed class SpectrumLoader(string folder, SpectrumShelf shelf, FaultList faults, List<string> warnings)
 {
     // Where light is below this share of its peak, nothing has to be known about what it meets.
     private const double LightShare = 1e-3;
 
     private const string Cie1931 = "CIE 1931 2°", Cie1964 = "CIE 1964 10°";
 
-    private readonly Dictionary<string, SpectrumTable?> _tables = [];
     private (double FirstNm, double LastNm)? _lightNm;
 
     /// <summary>Every scalar that named a file.</summary>
@@ -72,7 +71,7 @@ internal sealed class SpectrumLoader(string folder, FaultList faults, List<strin
     public bool IsByAngle(Node? value, string key)
     {
         var name = value is MappingNode mapping ? mapping.Find("file")?.Value : value;
-        return name is ScalarNode scalar && IsFileName(scalar) && File.Exists(PathOf(scalar)) && Table(scalar, key)?.FirstColumn == "angle_deg";
+        return name is ScalarNode scalar && IsFileName(scalar) && shelf.Has(PathOf(scalar)) && Table(scalar, key)?.FirstColumn == "angle_deg";
     }
 
     /// <summary>A table over the polar angle; null with a fault.</summary>
@@ -167,7 +166,7 @@ internal sealed class SpectrumLoader(string folder, FaultList faults, List<strin
     {
         FileNames.Add(reference.File);
         string path = PathOf(reference.File);
-        if (File.Exists(path))
+        if (shelf.Has(path))
             return Table(reference.File, reference.Key);
         string found = Directory.Exists(path) ? "is a folder" : $"is not there (looked for {path})";
         faults.Add(reference.File.Place, $"{reference.Key}: the file {Shown.Quoted(reference.File.Text)} {found}; a spectrum file is due.");
@@ -177,9 +176,7 @@ internal sealed class SpectrumLoader(string folder, FaultList faults, List<strin
     private SpectrumTable? Table(ScalarNode file, string key)
     {
         string path = PathOf(file);
-        if (!_tables.TryGetValue(path, out var table))
-            _tables[path] = table = Guarded(file, key, () => SpectrumFile.Read(path));
-        return table;
+        return Guarded(file, key, () => shelf.Table(path));
     }
 
     private string? Column(SpectrumReference reference, SpectrumTable table, SpectrumKind kind)
@@ -206,7 +203,7 @@ internal sealed class SpectrumLoader(string folder, FaultList faults, List<strin
         // After a fault in all the lights nothing is known to be needed; the first row always covers itself.
         double firstNm = table.WavelengthsNm[0] + reference.Options.ShiftNm;
         var options = reference.Options with { NeededNm = _lightNm ?? (firstNm, firstNm) };
-        var imported = Guarded(reference.File, reference.Key, () => SpectrumImport.ToGrid<TUnit>(table, column, options));
+        var imported = Guarded(reference.File, reference.Key, () => shelf.Import<TUnit>(table, column, options));
         if (imported is not null)
             warnings.AddRange(imported.Warnings.Except(warnings, StringComparer.Ordinal).ToList());
         return imported?.Spectrum;

@@ -69,7 +69,7 @@ public sealed class FormulateCommandTests
         // Its own file may be written again, also from itself.
         workshop.Run("formulate", Monitor, "--save", Saved).AssertDone();
         workshop.Run("formulate", Saved, "--save", Saved).AssertDone();
-        Assert.Single(workshop.Read(Saved).Split('\n'), line => line.Contains("formulate wrote this file", StringComparison.Ordinal));
+        Assert.Single(workshop.Read(Saved).Split('\n'), line => line.Contains("dotcoat wrote this file", StringComparison.Ordinal));
     }
 
     [Fact]
