@@ -93,6 +93,7 @@ internal static class CommandLine
             InspectCommand.Create(context),
             ReportCommand.Create(context),
             ScatterFromHazeCommand.Create(context),
+            QuantumYieldCommand.Create(context),
             StartCommand.Create(context),
             DeskCommand.Create(context),
         };
