@@ -15,7 +15,7 @@ let diagram = sessionStorage.getItem('diagram') ?? 'chromaticity-1976';
 let shown = null;
 let isAsking = false;
 let isStale = false;
-let rounds = 0;
+let wanted = 0;
 
 by('title').textContent = description.title;
 document.title = `${description.title} – film desk`;
@@ -70,12 +70,16 @@ function buttons() {
 }
 
 async function solve() {
+  // The page says which of its films it shows: tests and measurements wait for it.
+  document.body.dataset.wanted = String(++wanted);
   if (isAsking) { isStale = true; return; }
   isAsking = true;
   do {
     isStale = false;
+    const round = wanted;
     try {
       show(await post('solve', request({ charts: ['spectrum', diagram] })));
+      document.body.dataset.shown = String(round);
     } catch (refused) {
       if (!(refused instanceof Refusal)) throw refused;
       const rest = inputs.faults(refused.faults);
@@ -109,7 +113,6 @@ function show(reply) {
   }
   list(by('notes'), [{ heading: 'Warnings', lines: reply.warnings }, { heading: 'Cautions', lines: reply.cautions }]);
   by('command').textContent = reply.command ?? 'Save first: a dropped file is not on the disk yet.';
-  document.body.dataset.rounds = String(++rounds);
 }
 
 function figures() {
