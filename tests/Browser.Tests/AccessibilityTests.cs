@@ -9,9 +9,7 @@ public sealed class AccessibilityTests(Browser browser)
     [Theory]
     [InlineData(1280, 720, false)]
     [InlineData(1280, 720, true)]
-    [InlineData(820, 1180, false)]
     [InlineData(820, 1180, true)]
-    [InlineData(390, 844, false)]
     public async Task Audit_FindsNothingSerious(int width, int height, bool isDark)
     {
         await using var desk = await DeskPage.OpenAsync(browser, width, height, isDark, isTablet: width < 1000);

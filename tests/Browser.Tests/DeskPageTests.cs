@@ -57,8 +57,7 @@ public sealed class DeskPageTests(Browser browser)
         {
             await desk.Field("Thickness").FillAsync(text);
             await Assertions.Expect(desk.Field("Thickness")).ToHaveAttributeAsync("aria-invalid", "true");
-            string fault = await desk.TextAsync(".field:has(input[aria-invalid]) .fault");
-            Assert.Contains(said, fault, StringComparison.Ordinal);
+            await Assertions.Expect(desk.Page.Locator(".field:has(input[aria-invalid]) .fault")).ToContainTextAsync(said);
             Assert.Equal((place!.X, place.Y), ((await below.BoundingBoxAsync())!.X, (await below.BoundingBoxAsync())!.Y));
         }
 

@@ -62,6 +62,11 @@ internal sealed class DeskEndpoints(DeskSession session, string token)
             case ("GET", ["film"]):
                 await SendAsync(context, session.Description).ConfigureAwait(false);
                 break;
+            case ("GET", ["ground", var theme, var chart]) when await session.GroundAsync(chart, theme == "dark", stop).ConfigureAwait(false) is { } ground:
+                // The same for every film of this run: the browser may keep it.
+                context.Response.Headers.CacheControl = "private, max-age=86400";
+                await SendAsync(context, ground, "image/png").ConfigureAwait(false);
+                break;
             case ("POST", ["solve"]):
                 await SendAsync(context, await session.SolveAsync(await ReadAsync(request, stop).ConfigureAwait(false), stop).ConfigureAwait(false)).ConfigureAwait(false);
                 break;

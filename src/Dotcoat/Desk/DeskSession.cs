@@ -96,6 +96,15 @@ internal sealed class DeskSession : IDisposable
             Math.Round(watch.Elapsed.TotalMilliseconds - solveMs, 2));
     }
 
+    /// <summary>The ground that a chart of every film has, as PNG; null for a chart without one.</summary>
+    public async Task<byte[]?> GroundAsync(string chart, bool isDark, CancellationToken cancellationToken)
+    {
+        if (!PageCharts.Names.Contains(chart, StringComparer.Ordinal))
+            return null;
+        var appraisal = FilmAppraiser.Appraise(FilmCase, await SolveAsync(FilmCase, cancellationToken).ConfigureAwait(false));
+        return PageCharts.GroundPng(chart, FilmCase, appraisal, isDark);
+    }
+
     /// <summary>Finds the loadings that put white on target.</summary>
     public async Task<FormulateReply> FormulateAsync(PageRequest request, CancellationToken cancellationToken)
     {

@@ -1,3 +1,4 @@
+using System.Collections.Concurrent;
 using System.Globalization;
 using Colorimetry;
 using FilmOptics;
@@ -11,6 +12,10 @@ internal static class ChromaticityChart
     private const double LabelSize = 8.5, FieldLeft = 60, FieldTop = 48;
     private static readonly int[] LabelledNm = [450, 470, 480, 490, 500, 510, 520, 530, 540, 550, 560, 570, 580, 590, 600, 620, 700];
     private static readonly int[] LabelledKelvin = [2000, 3000, 4000, 5000, 6500, 10000];
+
+    // Neither depends on the film, and a page draws many films after one another.
+    private static readonly Lazy<Chromaticity[]> BlackBodies = new(() => [.. Enumerable.Range(0, 121).Select(i => PlanckianLocus.At(1e6 / (40 + (i * 5))))]);
+    private static readonly ConcurrentDictionary<(ChromaticityDiagram Diagram, string Ground), IReadOnlyList<Mark>> Grounds = new();
 
     public static Drawing Of(FilmCase filmCase, FilmAppraisal appraisal, ChromaticityDiagram diagram, Palette palette)
     {
@@ -61,7 +66,7 @@ internal static class ChromaticityChart
     {
         var plot = scale.Plot;
         Spot[] locus = [.. Enumerable.Range(380, 321).Select(nm => scale.At(Monochromatic(nm)))];
-        plot.Inside(ChromaticityGround.Marks(scale, palette.Ground, locus));
+        plot.Inside(Grounds.GetOrAdd((scale.Diagram, palette.Ground), _ => [.. ChromaticityGround.Marks(scale, palette.Ground, locus)]));
         var srgb = ColourGamut.Named("BT.709"); // sRGB has its primaries: IEC 61966-2-1.
         plot.Inside(
             new Shape(locus, Closed: true, null, 1, new Stroke(palette.Ink, 1.1)),
@@ -97,7 +102,7 @@ internal static class ChromaticityChart
 
     /// <summary>Black bodies from 25 000 K to 1560 K.</summary>
     internal static Mark PlanckianLine(ChromaticityScale scale, Palette palette) => new Shape(
-        [.. Enumerable.Range(0, 121).Select(i => scale.At(PlanckianLocus.At(1e6 / (40 + (i * 5)))))], Closed: false, null, 1, new Stroke(palette.Faint, 0.9));
+        scale.At(BlackBodies.Value), Closed: false, null, 1, new Stroke(palette.Faint, 0.9));
 
     private static void Triangles(ChromaticityScale scale, FilmCase filmCase, FilmAppraisal appraisal, Palette palette)
     {

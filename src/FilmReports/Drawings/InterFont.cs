@@ -1,4 +1,5 @@
 using System.Buffers;
+using System.Collections.Concurrent;
 using System.Text;
 using SkiaSharp;
 
@@ -9,6 +10,10 @@ internal static class InterFont
 {
     private static readonly Lazy<SKTypeface> Regular = new(() => Load("Inter-Regular"));
     private static readonly Lazy<SKTypeface> SemiBold = new(() => Load("Inter-SemiBold"));
+
+    // Labels repeat from drawing to drawing, and measuring makes a native font each time.
+    private const int MostWidths = 10_000;
+    private static readonly ConcurrentDictionary<(string Text, double Size, TextWeight Weight), double> Widths = new();
 
     /// <summary>A font for drawing or measuring; the caller disposes of it.</summary>
     public static SKFont Of(double size, TextWeight weight) => new(TypefaceOf(weight), (float)size)
@@ -23,9 +28,9 @@ internal static class InterFont
     /// <exception cref="ArgumentException">The font lacks a character: it would be drawn as nothing.</exception>
     public static double WidthOf(string text, double size, TextWeight weight)
     {
-        using var font = Of(size, weight);
-        RequireGlyphs(text, font);
-        return font.MeasureText(text);
+        if (Widths.Count >= MostWidths)
+            Widths.Clear();
+        return Widths.GetOrAdd((text, size, weight), Measured);
     }
 
     /// <summary>Whether every character can be drawn.</summary>
@@ -56,6 +61,13 @@ internal static class InterFont
     {
         if (Missing(text, font) is { } character)
             throw new ArgumentException($"The font has no {character}, needed by '{text}'.", nameof(text));
+    }
+
+    private static double Measured((string Text, double Size, TextWeight Weight) words)
+    {
+        using var font = Of(words.Size, words.Weight);
+        RequireGlyphs(words.Text, font);
+        return font.MeasureText(words.Text);
     }
 
     private static string? Missing(string text, SKFont font)

@@ -11,9 +11,9 @@ internal static class SvgRenderer
 
     /// <summary>The drawing as an SVG document (or, inside a page, as an element).</summary>
     /// <param name="drawing">What to draw.</param>
-    /// <param name="ground">Colour of the paper, #rrggbb.</param>
+    /// <param name="ground">Colour of the paper, #rrggbb; null leaves it out, so that what lies below shows.</param>
     /// <param name="standalone">Whether an XML declaration goes in front.</param>
-    public static string Write(Drawing drawing, string ground, bool standalone)
+    public static string Write(Drawing drawing, string? ground, bool standalone)
     {
         var text = new StringBuilder();
         var settings = new XmlWriterSettings { OmitXmlDeclaration = true, Indent = true, IndentChars = " ", NewLineChars = "\n" };
@@ -26,17 +26,23 @@ internal static class SvgRenderer
             svg.WriteAttributeString("font-family", "Inter, 'Segoe UI', 'Helvetica Neue', Arial, 'DejaVu Sans', sans-serif");
             Element(svg, "title", $"{drawing.Name}-title", drawing.Title);
             Element(svg, "desc", $"{drawing.Name}-desc", drawing.Description);
-            svg.WriteStartElement("rect");
-            svg.WriteAttributeString("width", N(drawing.Width));
-            svg.WriteAttributeString("height", N(drawing.Height));
-            svg.WriteAttributeString("fill", ground);
-            svg.WriteEndElement();
+            if (ground is not null)
+                Paper(svg, drawing, ground);
             int windows = 0;
             Draw(svg, drawing.Name, drawing.Marks, ref windows);
             svg.WriteEndElement();
         }
 
         return (standalone ? "<?xml version=\"1.0\" encoding=\"utf-8\"?>\n" : "") + text + "\n";
+    }
+
+    private static void Paper(XmlWriter svg, Drawing drawing, string ground)
+    {
+        svg.WriteStartElement("rect");
+        svg.WriteAttributeString("width", N(drawing.Width));
+        svg.WriteAttributeString("height", N(drawing.Height));
+        svg.WriteAttributeString("fill", ground);
+        svg.WriteEndElement();
     }
 
     private static void Element(XmlWriter svg, string name, string id, string text)

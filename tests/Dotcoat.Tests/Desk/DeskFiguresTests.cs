@@ -1,6 +1,8 @@
 using System.Globalization;
 using System.Net;
 using System.Text.Json.Nodes;
+using System.Text.RegularExpressions;
+using System.Xml.Linq;
 using Dotcoat.Tests.Commands;
 
 namespace Dotcoat.Tests.Desk;
@@ -86,7 +88,30 @@ public sealed class DeskFiguresTests
         string[] drawn = [.. reply["charts"]!.AsObject().Select(chart => chart.Key).Order(StringComparer.Ordinal)];
         Assert.Equal(["photon-fates", "spectrum"], drawn);
         foreach (var (name, svg) in reply["charts"]!.AsObject())
-            Assert.EndsWith((string)svg!, workshop.Read($"r/{name}.svg"), StringComparison.Ordinal);
+        {
+            // On the page the paper is the page's own.
+            string report = Regex.Replace(workshop.Read($"r/{name}.svg"), " <rect width=[^>]*/>\n", "", RegexOptions.None, TimeSpan.FromSeconds(5));
+            Assert.EndsWith((string)svg!, report, StringComparison.Ordinal);
+        }
+    }
+
+    [Theory]
+    [InlineData("chromaticity-1931")]
+    [InlineData("chromaticity-1976")]
+    public async Task Diagram_OnItsGround_HasEveryMarkOfTheReports(string name)
+    {
+        using var workshop = Workshop.WithDemo();
+        await using var desk = await OpenDesk.StartAsync(workshop);
+        var reply = (await desk.PostAsync("solve", OpenDesk.Request(more: ("charts", new JsonArray(name))))).Granted();
+        workshop.Run("report", OpenDesk.Film, "--model", "beer-lambert", "--out", "r").AssertDone();
+        var marks = (XElement svg) => svg.Descendants().Where(e => e.Name.LocalName is "text" or "polyline" or "circle" or "polygon")
+            .Where(e => e.Parent!.Name.LocalName != "clipPath").Select(e => e.ToString()).ToArray();
+        Assert.Equal(marks(XDocument.Parse(workshop.Read($"r/{name}.svg")).Root!), marks(XElement.Parse((string)reply["charts"]![name]!)));
+        byte[] light = (await desk.GetAsync($"ground/light/{name}")).Bytes, dark = (await desk.GetAsync($"ground/dark/{name}")).Bytes;
+        Assert.Equal([0x89, (byte)'P', (byte)'N', (byte)'G'], light[..4]);
+        Assert.False(light.AsSpan().SequenceEqual(dark));
+        Assert.InRange(light.Length, 1000, 60_000);
+        Assert.Equal(HttpStatusCode.NotFound, (await desk.GetAsync("ground/light/spectrum")).Status);
     }
 
     [Fact]

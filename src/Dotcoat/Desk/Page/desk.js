@@ -3,7 +3,7 @@ import { Refusal, drop, get, post, remove } from './api.js';
 import { open, wire } from './dialogs.js';
 import { Film, nameOfTab } from './film.js';
 import { Inputs } from './inputs.js';
-import { chart, element, list, table, update } from './show.js';
+import { chart, element, list, table, update, watchWidth } from './show.js';
 
 const by = id => document.getElementById(id);
 const tableNames = ['fates', 'gamut', 'colours', 'efficiency', 'bands', 'layers'];
@@ -100,14 +100,17 @@ function show(reply) {
   by('answer').classList.remove('wrong');
   by('answer').dataset.state = reply.onTarget === null ? 'none' : reply.onTarget ? 'on' : 'off';
   for (const [name, svg] of Object.entries(reply.charts)) {
-    if (name === 'spectrum') chart(by('spectrum'), svg);
-    else if (name === diagram) chart(by('diagram'), svg);
+    if (name === 'spectrum') chart(by('spectrum'), name, theme, svg);
+    else if (name === diagram) chart(by('diagram'), name, theme, svg);
   }
   figures();
   for (const name of tableNames) {
     const found = reply.tables.find(one => one.name === name);
     let place = by(`table-${name}`);
-    if (!place) by('tables').append(place = element('div', { id: `table-${name}`, className: 'wide' }));
+    if (!place) {
+      by('tables').append(place = element('div', { id: `table-${name}`, className: 'wide' }));
+      watchWidth(place);
+    }
     if (found) update(place, found);
     else place.replaceChildren();
   }
@@ -171,12 +174,13 @@ for (const id of ['spectrum', 'diagram']) {
   const enlarge = element('button', { type: 'button', className: 'quiet enlarge' }, 'Enlarge');
   enlarge.setAttribute('aria-label', `Enlarge the ${id}`);
   enlarge.addEventListener('click', () => {
-    const picture = by(id).querySelector('svg')?.cloneNode(true);
-    if (!picture) return;
+    const picture = by(id).querySelector('.picture')?.cloneNode(true);
+    const svg = picture?.querySelector('svg');
+    if (!svg) return;
     // Names inside the picture stay the page's own.
-    for (const part of picture.querySelectorAll('[id]')) part.id = `large-${part.id}`;
-    for (const part of picture.querySelectorAll('[clip-path]')) part.setAttribute('clip-path', part.getAttribute('clip-path').replace('#', '#large-'));
-    picture.setAttribute('aria-labelledby', picture.getAttribute('aria-labelledby').replace(/(^| )/g, '$1large-'));
+    for (const part of svg.querySelectorAll('[id]')) part.id = `large-${part.id}`;
+    for (const part of svg.querySelectorAll('[clip-path]')) part.setAttribute('clip-path', part.getAttribute('clip-path').replace('#', '#large-'));
+    svg.setAttribute('aria-labelledby', svg.getAttribute('aria-labelledby').replace(/(^| )/g, '$1large-'));
     by('large-chart').replaceChildren(picture);
     open('large');
   });
@@ -262,6 +266,7 @@ function offers() {
   }));
 }
 
+watchWidth(by('figures'));
 wire(film, description, request, text => { say(text); buttons(); });
 choose(diagram);
 paint();

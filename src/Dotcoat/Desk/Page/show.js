@@ -6,9 +6,8 @@ export function element(name, properties, ...children) {
   return made;
 }
 
-export function table(figures, caption) {
+export function table(figures) {
   const made = element('table', {});
-  if (caption) made.append(element('caption', {}, caption));
   made.append(element('thead', {}, element('tr', {}, ...figures.header.map(text => {
     const cell = element('th', {}, text);
     cell.scope = 'col';
@@ -37,10 +36,16 @@ export function update(place, figures) {
   }));
 }
 
-// The program drew the picture: the same marks as in its report.
-export function chart(figure, svg) {
-  const holder = figure.querySelector('.picture') ?? figure.insertBefore(element('div', { className: 'picture' }), figure.firstChild);
-  holder.innerHTML = svg;
+// The program drew the picture: the same marks as in its report. Those that move lie over a ground that stays.
+export function chart(figure, name, theme, svg) {
+  let holder = figure.querySelector('.picture');
+  if (!holder) figure.prepend(holder = element('div', { className: 'picture' }));
+  const ground = name.startsWith('chromaticity') ? `ground/${theme}/${name}` : '';
+  if (holder.dataset.ground !== ground) {
+    holder.dataset.ground = ground;
+    holder.replaceChildren(...(ground ? [element('img', { src: ground, alt: '' })] : []), element('div', { className: 'marks' }));
+  }
+  holder.lastElementChild.innerHTML = svg;
 }
 
 export function list(place, parts) {
@@ -50,3 +55,13 @@ export function list(place, parts) {
   place.replaceChildren(...parts.filter(part => part.lines.length > 0).flatMap(part =>
     [element('h3', {}, part.heading), element('ul', {}, ...part.lines.map(line => element('li', {}, line)))]));
 }
+
+// What can be scrolled sideways can be reached by keyboard; what cannot is no stop on the way.
+const widths = new ResizeObserver(entries => {
+  for (const { target } of entries) {
+    if (target.scrollWidth > target.clientWidth) target.tabIndex = 0;
+    else target.removeAttribute('tabindex');
+  }
+});
+
+export function watchWidth(place) { widths.observe(place); }
