@@ -94,6 +94,7 @@ internal static class CommandLine
             ReportCommand.Create(context),
             ScatterFromHazeCommand.Create(context),
             QuantumYieldCommand.Create(context),
+            DotCommand.Create(context),
             StartCommand.Create(context),
             DeskCommand.Create(context),
         };
