@@ -1,8 +1,5 @@
-using System.Text;
-using Colorimetry;
 using FilmDesign;
 using FilmOptics;
-using FilmReports.Charts;
 using FilmReports.Drawings;
 using FilmReports.Pages;
 
@@ -20,18 +17,24 @@ public static class FilmReport
     /// <param name="filmCase">The film file.</param>
     /// <param name="appraisal">Its figures.</param>
     /// <param name="formulation">The search behind it, or null where the film was taken as it is.</param>
-    public static IReadOnlyList<ReportFile> Write(FilmCase filmCase, FilmAppraisal appraisal, Formulation? formulation)
+    /// <param name="request">Which files; null for all, without a date.</param>
+    public static IReadOnlyList<ReportFile> Write(FilmCase filmCase, FilmAppraisal appraisal, Formulation? formulation, ReportRequest? request = null)
     {
         ArgumentNullException.ThrowIfNull(filmCase);
         ArgumentNullException.ThrowIfNull(appraisal);
-        var drawings = Drawings(filmCase, appraisal);
+        request ??= ReportRequest.Everything;
         string json = formulation is null ? ReportJson.Simulate(filmCase, appraisal) : ReportJson.Formulate(formulation);
         return
         [
-            Text("report.html", ReportPage.Write(filmCase, appraisal, formulation, drawings)),
-            Text(formulation is null ? "simulate.json" : "formulate.json", json),
-            .. Charts(drawings),
+            .. ReportFiles.Of(request, Text),
+            ReportFiles.Text(formulation is null ? "simulate.json" : "formulate.json", json),
         ];
+
+        ReportText Text(Palette palette)
+        {
+            var drawings = Drawings(filmCase, appraisal, palette);
+            return new(filmCase.Film.Title, request.Date, ReportPage.Of(filmCase, appraisal, formulation, drawings), drawings);
+        }
     }
 
     /// <summary>The charts alone, as PNG and SVG.</summary>
@@ -39,26 +42,9 @@ public static class FilmReport
     {
         ArgumentNullException.ThrowIfNull(filmCase);
         ArgumentNullException.ThrowIfNull(appraisal);
-        return Charts(Drawings(filmCase, appraisal));
+        return ReportFiles.Charts(Drawings(filmCase, appraisal, Palette.Light), ReportRequest.Everything.Forms);
     }
 
-    internal static IReadOnlyList<Drawing> Drawings(FilmCase filmCase, FilmAppraisal appraisal) =>
-    [
-        SpectrumChart.Of(filmCase, appraisal, Palette.Light),
-        ChromaticityChart.Of(filmCase, appraisal, ChromaticityDiagram.Xy1931, Palette.Light),
-        ChromaticityChart.Of(filmCase, appraisal, ChromaticityDiagram.UvPrime1976, Palette.Light),
-        FatesChart.Of(filmCase, appraisal, Palette.Light),
-        LotChart.Of(filmCase, Palette.Light),
-    ];
-
-    private static IReadOnlyList<ReportFile> Charts(IReadOnlyList<Drawing> drawings) =>
-    [
-        .. drawings.SelectMany(drawing => new[]
-        {
-            new ReportFile($"{drawing.Name}.png", CanvasRenderer.Png(drawing, Palette.Light.Ground)),
-            Text($"{drawing.Name}.svg", SvgRenderer.Write(drawing, Palette.Light.Ground, standalone: true)),
-        }),
-    ];
-
-    private static ReportFile Text(string name, string text) => new(name, new UTF8Encoding(encoderShouldEmitUTF8Identifier: false).GetBytes(text));
+    internal static IReadOnlyList<Drawing> Drawings(FilmCase filmCase, FilmAppraisal appraisal, Palette palette) =>
+        [.. FilmCharts.Names.Select(name => FilmCharts.Named(name, filmCase, appraisal, palette))];
 }

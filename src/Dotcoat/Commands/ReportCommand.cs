@@ -7,50 +7,70 @@ using FilmReports;
 
 namespace Dotcoat.Commands;
 
-/// <summary>dotcoat report FILE…: a page with charts for each film.</summary>
+/// <summary>dotcoat report FILE…: a page with charts for each film, and one with all of them side by side.</summary>
 internal static class ReportCommand
 {
+    private const string SideBySide = "side-by-side";
+
     public static Command Create(CommandContext context)
     {
         var files = new Argument<string[]>("FILE") { Description = "Film files, NAME.film.yaml.", Arity = ArgumentArity.OneOrMore };
         var options = new FilmOptions();
-        var command = new Command("report", "HTML, PNG and SVG of each film, into reports/NAME of the current folder unless --out says where.") { files };
+        var report = new ReportOptions();
+        var command = new Command(
+            "report",
+            $"HTML, PDF, PNG and SVG of each film, into reports/NAME of the current folder unless --out says where; of several films one more, {SideBySide}, that sets them one against another.") { files };
+        report.AddTo(command);
         options.AddTo(command);
-        command.SetAction(parsed => Run(context, parsed.GetValue(files)!, options.Read(parsed)));
+        command.SetAction(parsed => Run(context, parsed.GetValue(files)!, options.Read(parsed), report.Read(parsed)));
         return command;
     }
 
-    private static int Run(CommandContext context, string[] files, FilmRequest request)
+    private static int Run(CommandContext context, string[] files, FilmRequest request, ReportRequest report)
     {
-        var folders = files.Select(file => FolderOf(file, files.Length == 1, request.Delivery.OutputFolder)).ToArray();
+        string[] folders = [.. files.Select(file => FolderOf(FilmCommand.NameOf(file), files.Length == 1, request.Delivery.OutputFolder))];
+        if (files.Length > 1)
+            folders = [.. folders, FolderOf(SideBySide, alone: false, request.Delivery.OutputFolder)];
         if (folders.GroupBy(f => f, StringComparer.Ordinal).FirstOrDefault(g => g.Count() > 1) is { } twice)
-            throw new InputException(new InputFault(twice.Key, null, null, "would hold the reports of two film files of one name; report them one by one with --out."));
-        var reports = Progress.While(context, "drawing the report", () => files.Select(file => Make(context, file, request)).ToArray());
-        for (int i = 0; i < files.Length; i++)
+            throw new InputException(new InputFault(twice.Key, null, null, "would hold two reports of one name; report the films one by one with --out."));
+        var reports = Progress.While(context, "drawing the report", () => Make(context, files, request, report));
+        for (int i = 0; i < folders.Length; i++)
             OutputFolder.Write(context.PathOf(folders[i]), reports[i], context.CancellationToken);
         context.Output.Write(request.Delivery.Json ? Json(files, folders, reports) : Text(folders, reports));
         return ExitStatus.Done;
     }
 
-    private static string FolderOf(string file, bool alone, string? outputFolder) =>
-        outputFolder is null ? Path.Combine("reports", FilmCommand.NameOf(file))
+    private static string FolderOf(string name, bool alone, string? outputFolder) =>
+        outputFolder is null ? Path.Combine("reports", name)
         : alone ? outputFolder
-        : Path.Combine(outputFolder, FilmCommand.NameOf(file));
+        : Path.Combine(outputFolder, name);
 
-    private static List<OutputFile> Make(CommandContext context, string file, FilmRequest request)
+    // The report of each film, then that of all.
+    private static List<OutputFile>[] Make(CommandContext context, string[] files, FilmRequest request, ReportRequest report)
     {
-        var filmCase = FilmFile.Load(context.PathOf(file), request.Overrides);
-        var appraisal = FilmAppraiser.Appraise(filmCase, request.Model.Solve(filmCase.Film, context.CancellationToken));
-        return [.. FilmReport.Write(filmCase, appraisal, null).Select(f => new OutputFile(f.Name, f.Bytes))];
+        ReportedFilm[] films =
+        [
+            .. files.Select(file => FilmFile.Load(context.PathOf(file), request.Overrides))
+                .ToArray() // Every file is read, and its faults named, before the first film is solved.
+                .Select(filmCase => new ReportedFilm(filmCase, FilmAppraiser.Appraise(filmCase, request.Model.Solve(filmCase.Film, context.CancellationToken)))),
+        ];
+        return
+        [
+            .. films.Select(film => Output(FilmReport.Write(film.Case, film.Appraisal, null, report))),
+            .. films.Length > 1 ? [Output(FilmsReport.Write(films, report))] : Array.Empty<List<OutputFile>>(),
+        ];
     }
+
+    private static List<OutputFile> Output(IEnumerable<ReportFile> files) => [.. files.Select(file => new OutputFile(file.Name, file.Bytes))];
 
     private static string Text(string[] folders, List<OutputFile>[] reports)
     {
         var text = new TerminalText();
         for (int i = 0; i < folders.Length; i++)
         {
-            text.Verbatim(Path.Combine(folders[i], "report.html"));
-            text.Paragraph($"  and {reports[i].Count - 1} more files in {folders[i]}", indent: 2);
+            text.Verbatim(Path.Combine(folders[i], reports[i][0].Name));
+            if (reports[i].Count > 1)
+                text.Paragraph($"  and {reports[i].Count - 1} more files in {folders[i]}", indent: 2);
         }
 
         return text.ToString();
@@ -61,7 +81,7 @@ internal static class ReportCommand
         {
             schema = "dotcoat/1",
             title = "Reports",
-            reports = files.Select((file, i) => new { file, folder = folders[i], files = reports[i].Select(f => f.Name) }),
+            reports = folders.Select((folder, i) => new { file = i < files.Length ? files[i] : null, folder, files = reports[i].Select(f => f.Name) }),
             warnings = Array.Empty<string>(),
         },
         Indented) + "\n";

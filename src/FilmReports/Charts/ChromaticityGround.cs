@@ -11,7 +11,7 @@ internal static class ChromaticityGround
     private const double Saturation = 0.25;
 
     // Tiles are this wide and high, points, and tints differ by this much: neither step can be seen.
-    private const double Tile = 4;
+    private const double Tile = 4, Overlap = 0.6;
     private const int TintStep = 3;
 
     // How far beyond sRGB, in units of its most negative channel, the tint takes to fade, and what is left of it.
@@ -52,7 +52,8 @@ internal static class ChromaticityGround
         {
             if (!tiles.TryGetValue(tint, out var boxes))
                 tiles.Add(tint, boxes = []);
-            boxes.Add(box);
+            // A little into the next: where a reader smooths edges, no seam shines through.
+            boxes.Add(box with { Right = box.Right + Overlap, Bottom = box.Bottom + Overlap });
         }
     }
 

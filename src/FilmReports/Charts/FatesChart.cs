@@ -60,7 +60,7 @@ internal static class FatesChart
         foreach (var place in places)
         {
             lossBottom -= place.Width;
-            marks.Add(Downward(lossBottom, place.X, place.Width, bottom, place.Stream.Colour));
+            marks.Add(Downward(lossBottom, place.X, place.Width, bottom, place.Stream.Colour, palette.Ground));
             double labelX = place.X + (place.Width / 2);
             for (int line = 0; line < place.Lines.Length; line++)
                 marks.Add(new Words(place.Lines[line], new(labelX, bottom + 16 + (line * 11)), TextAnchor.Middle, 9, TextWeight.Regular, palette.Ink));
@@ -146,7 +146,7 @@ internal static class FatesChart
     }
 
     // A quarter turn: along the stream, then down, ending in an arrow's width of its own share.
-    private static Shape Downward(double fromY, double toX, double width, double bottom, string colour)
+    private static Shape Downward(double fromY, double toX, double width, double bottom, string colour, string ground)
     {
         const int Steps = 14;
         double radius = 16;
@@ -162,7 +162,7 @@ internal static class FatesChart
         outer.Add(new(toX + width, bottom));
         inner.Add(new(toX, bottom));
         inner.Reverse();
-        return new Shape([.. outer, .. inner], Closed: true, colour, 0.3, null);
+        return new Shape([.. outer, .. inner], Closed: true, colour, 0.3, new Stroke(ground, Math.Min(0.8, width * 0.4)));
     }
 
     private static string Percent(double share) => string.Create(CultureInfo.InvariantCulture, $"{share * 100:0.0}\u2009%");

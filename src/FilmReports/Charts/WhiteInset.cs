@@ -2,6 +2,7 @@ using System.Globalization;
 using Colorimetry;
 using FilmOptics;
 using FilmReports.Drawings;
+using FilmReports.Pages;
 
 namespace FilmReports.Charts;
 
@@ -74,8 +75,7 @@ internal sealed class WhiteInset
 
     private (double Across, double Up, double Span) Range(ChromaticityDiagram diagram)
     {
-        bool isAtPanel = _appraisal.Panel is not null && _filmCase.Target is null or { Place: TargetPlace.Panel };
-        var judged = (isAtPanel ? _appraisal.Panel!.White : _appraisal.FilmWhite).Chromaticity;
+        var judged = (Findings.IsAtPanel(_filmCase, _appraisal) ? _appraisal.Panel!.White : _appraisal.FilmWhite).Chromaticity;
         var (across, up) = ChromaticityScale.Coordinates(diagram, judged);
         if (_filmCase.Target is not { } target)
             return (across, up, 0.02);

@@ -129,7 +129,10 @@ internal static class CanvasRenderer
             {
                 Color = Colour(halo, 0.85), IsAntialias = true, Style = SKPaintStyle.Stroke, StrokeWidth = 2.5f, StrokeJoin = SKStrokeJoin.Round,
             };
-            canvas.DrawText(words.Text, (float)words.At.X, (float)words.At.Y, align, font, rim);
+            // As outlines: stroked text would stand twice in a PDF, once for each search hit.
+            float left = (float)words.At.X - (font.MeasureText(words.Text) * (words.Anchor switch { TextAnchor.Start => 0, TextAnchor.Middle => 0.5f, _ => 1 }));
+            using var outline = font.GetTextPath(words.Text, new SKPoint(left, (float)words.At.Y));
+            canvas.DrawPath(outline, rim);
         }
 
         using var ink = new SKPaint { Color = Colour(words.Colour, 1), IsAntialias = true };

@@ -56,6 +56,23 @@ internal static class InterFont
         return $"{text[..length].TrimEnd()}…";
     }
 
+    /// <summary>The text with a box in place of each character that cannot be drawn.</summary>
+    public static string Writable(string text, TextWeight weight)
+    {
+        if (CanWrite(text, weight))
+            return text;
+        using var font = Of(1, weight);
+        var written = new StringBuilder();
+        for (int i = 0; i < text.Length;)
+        {
+            bool isWhole = Rune.DecodeFromUtf16(text.AsSpan(i), out var rune, out int length) == OperationStatus.Done;
+            written.Append(isWhole && font.ContainsGlyph(rune.Value) ? text.AsSpan(i, length) : "\u25a1");
+            i += length;
+        }
+
+        return written.ToString();
+    }
+
     /// <summary>Throws where a character cannot be drawn.</summary>
     public static void RequireGlyphs(string text, SKFont font)
     {

@@ -19,7 +19,10 @@ internal sealed record Palette(string Ground, string Ink, string Hairline, strin
     /// <summary>For paper and screens in daylight.</summary>
     public static Palette Light { get; } = new("#fbfbf8", "#1d2126", "#e0e1df", "#555a60", "#2f5fd0", "#2d8a3e", "#c8402f");
 
-    /// <summary>For dark screens. Pages use it; charts keep their light ground.</summary>
+    /// <summary>For white paper: the light one, its ground as white as the sheet.</summary>
+    public static Palette Paper { get; } = Light with { Ground = "#ffffff" };
+
+    /// <summary>For dark screens.</summary>
     public static Palette Dark { get; } = new("#15181c", "#e8e6e0", "#2e3033", "#a9a9a4", "#7fa2f0", "#62bf74", "#ec7f70");
 
     /// <summary>Colour and dash of a lot's light, by the colour it emits.</summary>

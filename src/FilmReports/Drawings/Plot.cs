@@ -2,7 +2,7 @@ using System.Globalization;
 
 namespace FilmReports.Drawings;
 
-/// <summary>A field with two linear axes inside a drawing, and the marks drawn on it.</summary>
+/// <summary>A field with two axes inside a drawing, and the marks drawn on it. The axis upward may be logarithmic.</summary>
 internal sealed class Plot
 {
     private const double TickSize = 9.5, TitleSize = 10.5;
@@ -16,9 +16,10 @@ internal sealed class Plot
     /// <param name="x">Range from left to right.</param>
     /// <param name="y">Range from bottom to top.</param>
     /// <param name="labelArea">Where labels may go; the field itself unless given.</param>
-    public Plot(Palette palette, Box field, (double From, double To) x, (double From, double To) y, Box? labelArea = null)
+    /// <param name="isLogUp">Whether the axis upward is logarithmic; its range is then above 0.</param>
+    public Plot(Palette palette, Box field, (double From, double To) x, (double From, double To) y, Box? labelArea = null, bool isLogUp = false)
     {
-        (_palette, Field, X, Y) = (palette, field, x, y);
+        (_palette, Field, X, Y, IsLogUp) = (palette, field, x, y, isLogUp);
         Labels = new LabelPlacer(labelArea ?? field);
     }
 
@@ -31,6 +32,9 @@ internal sealed class Plot
     /// <summary>Range from bottom to top.</summary>
     public (double From, double To) Y { get; }
 
+    /// <summary>Whether the axis upward is logarithmic.</summary>
+    public bool IsLogUp { get; }
+
     /// <summary>Places labels on this field.</summary>
     public LabelPlacer Labels { get; }
 
@@ -40,12 +44,12 @@ internal sealed class Plot
     /// <summary>Where a point of the axes lies in the drawing.</summary>
     public Spot At(double x, double y) => new(
         Field.Left + ((x - X.From) / (X.To - X.From) * (Field.Right - Field.Left)),
-        Field.Bottom - ((y - Y.From) / (Y.To - Y.From) * (Field.Bottom - Field.Top)));
+        Field.Bottom - (ShareUp(y) * (Field.Bottom - Field.Top)));
 
     /// <summary>What a point of the drawing stands for on the axes.</summary>
     public (double X, double Y) ValueAt(Spot spot) => (
         X.From + ((spot.X - Field.Left) / (Field.Right - Field.Left) * (X.To - X.From)),
-        Y.From + ((Field.Bottom - spot.Y) / (Field.Bottom - Field.Top) * (Y.To - Y.From)));
+        ValueUp((Field.Bottom - spot.Y) / (Field.Bottom - Field.Top)));
 
     /// <summary>Adds marks that are cut off at the field.</summary>
     public void Inside(params IEnumerable<Mark> marks) => _inside.AddRange(marks);
@@ -64,7 +68,7 @@ internal sealed class Plot
     /// <summary>Hairline grid, tick labels and titles.</summary>
     /// <param name="stepX">Distance of ticks.</param>
     /// <param name="titleX">Title with unit.</param>
-    /// <param name="stepY">Distance of ticks.</param>
+    /// <param name="stepY">Distance of ticks; a logarithmic axis has one at each power of ten.</param>
     /// <param name="titleY">Title with unit.</param>
     public void Axes(double stepX, string titleX, double stepY, string titleY)
     {
@@ -77,10 +81,10 @@ internal sealed class Plot
         }
 
         double widest = 0;
-        foreach (double y in Ticks(Y, stepY))
+        foreach (double y in IsLogUp ? Decades(Y) : Ticks(Y, stepY))
         {
             var foot = At(X.From, y);
-            string text = Number(y, stepY);
+            string text = IsLogUp ? y.ToString("0.######", CultureInfo.InvariantCulture) : Number(y, stepY);
             widest = Math.Max(widest, InterFont.WidthOf(text, TickSize, TextWeight.Regular));
             Inside(new Shape([foot, At(X.To, y)], Closed: false, null, 1, hair));
             Over(new Words(text, new(Field.Left - 6, foot.Y + 3.4), TextAnchor.End, TickSize, TextWeight.Regular, _palette.Faint));
@@ -98,6 +102,16 @@ internal sealed class Plot
         double raw = span / ticks, power = Math.Pow(10, Math.Floor(Math.Log10(raw)));
         double lead = raw / power;
         return power * (lead <= 1 ? 1 : lead <= 2 ? 2 : lead <= 5 ? 5 : 10);
+    }
+
+    private double ShareUp(double y) => IsLogUp ? Math.Log(Math.Max(y, Y.From / 10) / Y.From) / Math.Log(Y.To / Y.From) : (y - Y.From) / (Y.To - Y.From);
+
+    private double ValueUp(double share) => IsLogUp ? Y.From * Math.Pow(Y.To / Y.From, share) : Y.From + (share * (Y.To - Y.From));
+
+    private static IEnumerable<double> Decades((double From, double To) range)
+    {
+        for (double power = Math.Ceiling(Math.Log10(range.From) - 1e-9); power <= Math.Log10(range.To) + 1e-9; power++)
+            yield return Math.Pow(10, power);
     }
 
     private static IEnumerable<double> Ticks((double From, double To) range, double step)

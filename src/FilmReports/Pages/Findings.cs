@@ -12,18 +12,22 @@ internal static class Findings
     {
         if (formulation is { Reached: false, Limit: { } limit })
             return limit;
-        bool isAtPanel = appraisal.Panel is not null && filmCase.Target is null or { Place: TargetPlace.Panel };
+        bool isAtPanel = IsAtPanel(filmCase, appraisal);
         var white = (isAtPanel ? appraisal.Panel!.White : appraisal.FilmWhite).Chromaticity;
         int decimals = Math.Min(4, Digits.ShareDecimals(appraisal.Output));
         string at = $"{(isAtPanel ? "Panel" : "Film")} white is at x {Digits.Fixed(white.X, decimals)}, y {Digits.Fixed(white.Y, decimals)}";
         if (filmCase.Target is not { } target)
             return $"{at}. The film file has no target to compare it with.";
         double distance = white.DistanceXyTo(new Chromaticity(target.WhiteX, target.WhiteY));
-        string off = $"{Digits.Fixed(distance, decimals)} in xy from x {Digits.Fixed(target.WhiteX, 4)}, y {Digits.Fixed(target.WhiteY, 4)}, tolerance {Digits.Significant(target.ToleranceXy, 3)}";
+        string off = $"{Distance(distance, decimals)} in xy from x {Digits.Fixed(target.WhiteX, 4)}, y {Digits.Fixed(target.WhiteY, 4)}, tolerance {Digits.Significant(target.ToleranceXy, 3)}";
         return distance <= target.ToleranceXy
             ? $"{at}: on target ({off})."
             : $"{at}: off target ({off}). The command formulate finds the loadings that bring it there, or says why none can.";
     }
+
+    /// <summary>Whether white is judged behind the panel: where the target says so, and without a target where there is a panel.</summary>
+    public static bool IsAtPanel(FilmCase filmCase, FilmAppraisal appraisal) =>
+        appraisal.Panel is not null && filmCase.Target is null or { Place: TargetPlace.Panel };
 
     /// <summary>The figures a reader asks for first.</summary>
     public static IEnumerable<(string Name, string Value)> Key(FilmCase filmCase, FilmAppraisal appraisal)
@@ -41,5 +45,12 @@ internal static class Findings
 
         if (filmCase.Film.Backlight.RadiantFluxW is { } watts)
             yield return ("film, lumens", Digits.Significant(appraisal.FilmLumensPerSourceWatt * watts, 4));
+    }
+
+    // Nearer than the last digit shown is not nothing.
+    private static string Distance(double distanceXy, int decimals)
+    {
+        double least = Math.Pow(10, -decimals);
+        return distanceXy < least / 2 ? $"less than {Digits.Fixed(least, decimals)}" : Digits.Fixed(distanceXy, decimals);
     }
 }

@@ -15,7 +15,7 @@ internal sealed record ReportFilm(FilmCase Case, FilmAppraisal Appraisal)
         new(filmCase, FilmAppraiser.Appraise(filmCase, (model ?? new DiscreteOrdinatesModel()).Solve(filmCase.Film, TestContext.Current.CancellationToken)));
 
     /// <summary>Its charts, drawn once.</summary>
-    public IReadOnlyList<Drawing> Drawings => _drawings ??= FilmReport.Drawings(Case, Appraisal);
+    public IReadOnlyList<Drawing> Drawings => _drawings ??= FilmReport.Drawings(Case, Appraisal, Palette.Light);
 }
 
 /// <summary>Films whose reports are looked at: both demos, and what is hard to draw.</summary>
