@@ -1,5 +1,7 @@
+using Colorimetry;
 using FilmDesign;
 using FilmOptics;
+using FilmReports.Charts;
 using FilmReports.Drawings;
 using FilmReports.Pages;
 
@@ -18,7 +20,9 @@ public static class FilmReport
     /// <param name="appraisal">Its figures.</param>
     /// <param name="formulation">The search behind it, or null where the film was taken as it is.</param>
     /// <param name="request">Which files; null for all, without a date.</param>
-    public static IReadOnlyList<ReportFile> Write(FilmCase filmCase, FilmAppraisal appraisal, Formulation? formulation, ReportRequest? request = null)
+    /// <param name="map">What other loadings would do, where it was computed.</param>
+    public static IReadOnlyList<ReportFile> Write(
+        FilmCase filmCase, FilmAppraisal appraisal, Formulation? formulation, ReportRequest? request = null, LoadingMap? map = null)
     {
         ArgumentNullException.ThrowIfNull(filmCase);
         ArgumentNullException.ThrowIfNull(appraisal);
@@ -32,7 +36,7 @@ public static class FilmReport
 
         ReportText Text(Palette palette)
         {
-            var drawings = Drawings(filmCase, appraisal, palette);
+            var drawings = Drawings(filmCase, appraisal, palette, map);
             return new(filmCase.Film.Title, request.Date, ReportPage.Of(filmCase, appraisal, formulation, drawings), drawings);
         }
     }
@@ -45,6 +49,15 @@ public static class FilmReport
         return ReportFiles.Charts(Drawings(filmCase, appraisal, Palette.Light), ReportRequest.Everything.Forms);
     }
 
-    internal static IReadOnlyList<Drawing> Drawings(FilmCase filmCase, FilmAppraisal appraisal, Palette palette) =>
-        [.. FilmCharts.Names.Select(name => FilmCharts.Named(name, filmCase, appraisal, palette))];
+    internal static IReadOnlyList<Drawing> Drawings(FilmCase filmCase, FilmAppraisal appraisal, Palette palette, LoadingMap? map = null) =>
+    [
+        SpectrumChart.Of(filmCase, appraisal, palette),
+        ChromaticityChart.Of(filmCase, appraisal, ChromaticityDiagram.Xy1931, palette),
+        ChromaticityChart.Of(filmCase, appraisal, ChromaticityDiagram.UvPrime1976, palette),
+        FatesChart.Of(filmCase, appraisal, palette),
+        LotChart.Of(filmCase, palette),
+        .. appraisal.Output.Angles is null ? Array.Empty<Drawing>() : [AngleChart.Of(filmCase, appraisal.Output.Angles, palette)],
+        .. appraisal.Zone is null ? Array.Empty<Drawing>() : [ZoneChart.Of([("this film", appraisal.Zone)], palette)],
+        .. map is null ? Array.Empty<Drawing>() : [LoadingMapChart.Of(filmCase, map, palette)],
+    ];
 }

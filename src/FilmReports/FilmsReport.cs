@@ -1,3 +1,4 @@
+using FilmDesign;
 using FilmOptics;
 using FilmReports.Charts;
 using FilmReports.Drawings;
@@ -8,7 +9,8 @@ namespace FilmReports;
 /// <summary>A film with its figures.</summary>
 /// <param name="Case">The film file.</param>
 /// <param name="Appraisal">Its figures.</param>
-public sealed record ReportedFilm(FilmCase Case, FilmAppraisal Appraisal);
+/// <param name="Map">What other loadings would do, where it was computed.</param>
+public sealed record ReportedFilm(FilmCase Case, FilmAppraisal Appraisal, LoadingMap? Map = null);
 
 /// <summary>The report of several films: one against another on the first page, then each in full.</summary>
 public static class FilmsReport
@@ -26,14 +28,21 @@ public static class FilmsReport
 
     private static ReportText Text(IReadOnlyList<ReportedFilm> films, DateOnly? date, Palette palette)
     {
-        Drawing[] together = [FilmSpectraChart.Of(films, palette), FilmWhitesChart.Of(films, palette)];
+        // Profiles of one zone go into one picture.
+        (string Name, ZoneProfile Profile)[] zones = [.. films.Select((film, i) => (FilmLetters.Of(i), film.Appraisal.Zone)).Where(z => z.Zone is not null).Select(z => (z.Item1, z.Zone!))];
+        Drawing[] together =
+        [
+            FilmSpectraChart.Of(films, palette),
+            FilmWhitesChart.Of(films, palette),
+            .. zones.Length == films.Count ? [ZoneChart.Of(zones, palette)] : Array.Empty<Drawing>(),
+        ];
         string title = $"{string.Join(", ", films.Take(films.Count - 1).Select(film => film.Case.Film.Title))} and {films[^1].Case.Film.Title}";
         return new(
             title,
             date,
             [
-                ComparisonPage.Of(films, together),
-                .. films.SelectMany((film, i) => ReportPage.Of(film.Case, film.Appraisal, null, FilmReport.Drawings(film.Case, film.Appraisal, palette))
+                .. ComparisonPage.Of(films, together),
+                .. films.SelectMany((film, i) => ReportPage.Of(film.Case, film.Appraisal, null, FilmReport.Drawings(film.Case, film.Appraisal, palette, film.Map))
                     .Select(block => Lettered(block, FilmLetters.Of(i)))),
             ],
             together);

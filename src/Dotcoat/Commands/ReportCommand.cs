@@ -2,6 +2,7 @@ using System.CommandLine;
 using System.Text.Json;
 using Colorimetry;
 using Dotcoat.Terminal;
+using FilmDesign;
 using FilmOptics;
 using FilmReports;
 
@@ -22,11 +23,14 @@ internal static class ReportCommand
             $"HTML, PDF, PNG and SVG of each film, into reports/NAME of the current folder unless --out says where; of several films one more, {SideBySide}, that sets them one against another.") { files };
         report.AddTo(command);
         options.AddTo(command);
-        command.SetAction(parsed => Run(context, parsed.GetValue(files)!, options.Read(parsed), report.Read(parsed)));
+        var extras = new TracedExtras();
+        extras.AddTo(command);
+        command.SetAction(parsed => Run(
+            context, parsed.GetValue(files)!, options.Read(parsed), new(report.Read(parsed), report.IsMapAskedIn(parsed), extras.Read(parsed))));
         return command;
     }
 
-    private static int Run(CommandContext context, string[] files, FilmRequest request, ReportRequest report)
+    private static int Run(CommandContext context, string[] files, FilmRequest request, ReportCommandRequest report)
     {
         string[] folders = [.. files.Select(file => FolderOf(FilmCommand.NameOf(file), files.Length == 1, request.Delivery.OutputFolder))];
         if (files.Length > 1)
@@ -46,19 +50,25 @@ internal static class ReportCommand
         : Path.Combine(outputFolder, name);
 
     // The report of each film, then that of all.
-    private static List<OutputFile>[] Make(CommandContext context, string[] files, FilmRequest request, ReportRequest report)
+    private static List<OutputFile>[] Make(CommandContext context, string[] files, FilmRequest request, ReportCommandRequest report)
     {
-        ReportedFilm[] films =
-        [
-            .. files.Select(file => FilmFile.Load(context.PathOf(file), request.Overrides))
-                .ToArray() // Every file is read, and its faults named, before the first film is solved.
-                .Select(filmCase => new ReportedFilm(filmCase, FilmAppraiser.Appraise(filmCase, request.Model.Solve(filmCase.Film, context.CancellationToken)))),
-        ];
+        // Every file is read, and its faults named, before the first film is solved.
+        FilmCase[] filmCases = [.. files.Select(file => FilmFile.Load(context.PathOf(file), request.Overrides))];
+        ReportedFilm[] films = [.. filmCases.Select(filmCase => Solved(context, filmCase, request, report))];
         return
         [
-            .. films.Select(film => Output(FilmReport.Write(film.Case, film.Appraisal, null, report))),
-            .. films.Length > 1 ? [Output(FilmsReport.Write(films, report))] : Array.Empty<List<OutputFile>>(),
+            .. films.Select(film => Output(FilmReport.Write(film.Case, film.Appraisal, null, report.Report, film.Map))),
+            .. films.Length > 1 ? [Output(FilmsReport.Write(films, report.Report))] : Array.Empty<List<OutputFile>>(),
         ];
+    }
+
+    private static ReportedFilm Solved(CommandContext context, FilmCase filmCase, FilmRequest request, ReportCommandRequest report)
+    {
+        var appraisal = FilmAppraiser.Appraise(filmCase, request.Model.Solve(filmCase.Film, context.CancellationToken));
+        return new(
+            filmCase,
+            report.Extras.AddTo(appraisal, filmCase, context.CancellationToken),
+            report.WithMap ? LoadingMap.Compute(filmCase, request.Model, cancellationToken: context.CancellationToken) : null);
     }
 
     private static List<OutputFile> Output(IEnumerable<ReportFile> files) => [.. files.Select(file => new OutputFile(file.Name, file.Bytes))];
@@ -88,3 +98,9 @@ internal static class ReportCommand
 
     private static JsonSerializerOptions Indented { get; } = new() { WriteIndented = true };
 }
+
+/// <summary>What a report was asked to hold.</summary>
+/// <param name="Report">Which files, and the date they bear.</param>
+/// <param name="WithMap">Whether with the loading map.</param>
+/// <param name="Extras">What tracing adds.</param>
+internal sealed record ReportCommandRequest(ReportRequest Report, bool WithMap, TracedExtrasRequest Extras);

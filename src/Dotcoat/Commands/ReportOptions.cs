@@ -5,7 +5,7 @@ using FilmReports;
 
 namespace Dotcoat.Commands;
 
-/// <summary>--to and --date.</summary>
+/// <summary>--to, --date and --loading-map.</summary>
 internal sealed class ReportOptions
 {
     private static readonly string[] Names = [.. Enum.GetValues<ReportForm>().Select(NameOf)];
@@ -31,13 +31,21 @@ internal sealed class ReportOptions
         },
     };
 
+    private readonly Option<bool> _map = new("--loading-map")
+    {
+        Description = "Adds white error, blue leakage and coverage over the loadings of the two free lots, half to one and a half times those of the file.",
+    };
+
     public void AddTo(Command command)
     {
+        command.Options.Add(_map);
         command.Options.Add(_to);
         command.Options.Add(_date);
     }
 
     public ReportRequest Read(ParseResult parsed) => new(parsed.GetValue(_to)!, parsed.GetValue(_date));
+
+    public bool IsMapAskedIn(ParseResult parsed) => parsed.GetValue(_map);
 
     private static ReportForm[] Forms(ArgumentResult result)
     {

@@ -9,6 +9,15 @@ internal static class PlacedMarks
     /// <param name="sizeFactor">Size there over its own.</param>
     public static IEnumerable<Mark> At(this Drawing drawing, Spot at, double sizeFactor) => drawing.Marks.Select(mark => Placed(mark, at, sizeFactor));
 
+    /// <summary>One drawing with another below it, under the name and title of the upper.</summary>
+    public static Drawing Above(this Drawing upper, Drawing lower) => upper with
+    {
+        Width = Math.Max(upper.Width, lower.Width),
+        Height = upper.Height + lower.Height,
+        Description = $"{upper.Description} {lower.Description}".TrimEnd(),
+        Marks = [.. upper.Marks, .. lower.At(new(0, upper.Height), 1)],
+    };
+
     private static Mark Placed(Mark mark, Spot at, double factor) => mark switch
     {
         Shape shape => shape with { Spots = Placed(shape.Spots, at, factor), Stroke = Placed(shape.Stroke, factor) },

@@ -72,6 +72,25 @@ internal sealed class Plot
     /// <param name="titleY">Title with unit.</param>
     public void Axes(double stepX, string titleX, double stepY, string titleY)
     {
+        AxisAcross(stepX, titleX);
+        double widest = 0;
+        foreach (double y in IsLogUp ? Decades(Y) : Ticks(Y, stepY))
+        {
+            var foot = At(X.From, y);
+            string text = IsLogUp ? y.ToString("0.######", CultureInfo.InvariantCulture) : Number(y, stepY);
+            widest = Math.Max(widest, InterFont.WidthOf(text, TickSize, TextWeight.Regular));
+            Inside(new Shape([foot, At(X.To, y)], Closed: false, null, 1, new Stroke(_palette.Hairline, 0.7)));
+            Over(new Words(text, new(Field.Left - 6, foot.Y + 3.4), TextAnchor.End, TickSize, TextWeight.Regular, _palette.Faint));
+        }
+
+        Over(new Words(titleY, new(Field.Left - widest - 14, (Field.Top + Field.Bottom) / 2), TextAnchor.Middle, TitleSize, TextWeight.Regular, _palette.Ink, TurnDeg: -90));
+    }
+
+    /// <summary>The axis to the right alone, and the line that the axis upward stands on.</summary>
+    /// <param name="stepX">Distance of ticks.</param>
+    /// <param name="titleX">Title with unit.</param>
+    public void AxisAcross(double stepX, string titleX)
+    {
         var hair = new Stroke(_palette.Hairline, 0.7);
         foreach (double x in Ticks(X, stepX))
         {
@@ -80,20 +99,9 @@ internal sealed class Plot
             Over(new Words(Number(x, stepX), new(foot.X, Field.Bottom + 13), TextAnchor.Middle, TickSize, TextWeight.Regular, _palette.Faint));
         }
 
-        double widest = 0;
-        foreach (double y in IsLogUp ? Decades(Y) : Ticks(Y, stepY))
-        {
-            var foot = At(X.From, y);
-            string text = IsLogUp ? y.ToString("0.######", CultureInfo.InvariantCulture) : Number(y, stepY);
-            widest = Math.Max(widest, InterFont.WidthOf(text, TickSize, TextWeight.Regular));
-            Inside(new Shape([foot, At(X.To, y)], Closed: false, null, 1, hair));
-            Over(new Words(text, new(Field.Left - 6, foot.Y + 3.4), TextAnchor.End, TickSize, TextWeight.Regular, _palette.Faint));
-        }
-
         Over(
             new Shape([new(Field.Left, Field.Top), new(Field.Left, Field.Bottom), new(Field.Right, Field.Bottom)], Closed: false, null, 1, new Stroke(_palette.Ink, 0.9)),
-            new Words(titleX, new((Field.Left + Field.Right) / 2, Field.Bottom + 29), TextAnchor.Middle, TitleSize, TextWeight.Regular, _palette.Ink),
-            new Words(titleY, new(Field.Left - widest - 14, (Field.Top + Field.Bottom) / 2), TextAnchor.Middle, TitleSize, TextWeight.Regular, _palette.Ink, TurnDeg: -90));
+            new Words(titleX, new((Field.Left + Field.Right) / 2, Field.Bottom + 29), TextAnchor.Middle, TitleSize, TextWeight.Regular, _palette.Ink));
     }
 
     /// <summary>A step of 1, 2 or 5 times a power of ten that gives about that many ticks.</summary>

@@ -8,8 +8,14 @@ internal static class ComparisonPage
 {
     /// <summary>The page.</summary>
     /// <param name="films">Two or more.</param>
-    /// <param name="drawings">Charts that hold all of them.</param>
-    public static OnePage Of(IReadOnlyList<ReportedFilm> films, IReadOnlyList<Drawing> drawings) => new(
+    /// <param name="drawings">Charts that hold all of them; the first two go on the first page.</param>
+    public static IEnumerable<Block> Of(IReadOnlyList<ReportedFilm> films, IReadOnlyList<Drawing> drawings) =>
+    [
+        Summary(films, [.. drawings.Take(2)]),
+        .. drawings.Skip(2).Select(drawing => new Figure(drawing)),
+    ];
+
+    private static OnePage Summary(IReadOnlyList<ReportedFilm> films, IReadOnlyList<Drawing> drawings) => new(
     [
         new Heading(1, $"{Digits.Count(films.Count)} films side by side"),
         new Paragraph("Shares are per source photon, lumens and power per source watt.", ParagraphRole.Made),

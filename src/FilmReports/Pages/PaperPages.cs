@@ -86,21 +86,25 @@ internal sealed class PaperPages
                 last++;
             double height = pieces.GetRange(first, last - first + 1).Sum(piece => piece.Before + piece.Height);
             if (_y + height > Bottom && height <= Bottom - Top)
-                NewPage();
+                BreakBefore(pieces[first]);
             for (; first <= last; first++)
                 Place(pieces[first]);
         }
     }
 
+    private void BreakBefore(Piece piece)
+    {
+        if (IsAtTop)
+            return;
+        NewPage();
+        if (piece.Repeated is { } head)
+            Place(head);
+    }
+
     private void Place(Piece piece)
     {
-        if (_y + piece.Before + piece.Height > Bottom && !IsAtTop)
-        {
-            NewPage();
-            if (piece.Repeated is { } head)
-                Place(head);
-        }
-
+        if (_y + piece.Before + piece.Height > Bottom)
+            BreakBefore(piece);
         _y += IsAtTop ? 0 : piece.Before;
         _pages[^1].AddRange(piece.Draw(_y));
         _y += piece.Height;

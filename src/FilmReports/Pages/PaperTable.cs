@@ -35,7 +35,7 @@ internal sealed class PaperTable
         var head = paper.Row(table.Head, paper._palette.Faint, isHead: true, isSum: false);
         var caption = paper.Caption();
         Piece[] rows = [.. table.Rows.Select((row, i) =>
-            paper.Row(row, palette.Ink, isHead: false, isSum: table.Kind == TableKind.WithSum && i == table.Rows.Count - 1) with { Repeated = head })];
+            paper.Row(row, palette.Ink, isHead: false, isSum: table.Kind == TableKind.WithSum && i == table.Rows.Count - 1) with { Repeated = i > 0 ? head : null })];
         bool whole = caption.Height + head.Height + rows.Sum(row => row.Height) <= together;
         return [caption, head with { KeepsNext = true }, .. rows.Select((row, i) => row with { KeepsNext = i < rows.Length - 1 && (whole || i == 0 || i == rows.Length - 2) })];
     }

@@ -51,6 +51,12 @@ internal static class ReportPage
         yield return Table.Of("White and primaries", ["colour", "x", "y", "u′", "v′", "CCT / K", "Duv"], ReportTables.Colours(appraisal));
         yield return new Figure(figures["chromaticity-1931"]);
         yield return new Figure(figures["chromaticity-1976"]);
+        foreach (string name in (string[])["colour-over-angle", "halo"])
+        {
+            if (figures.TryGetValue(name, out var drawing))
+                yield return new Figure(drawing);
+        }
+
         if (appraisal.Gamut is not { } gamut)
             yield break;
         yield return Table.Of(
@@ -82,6 +88,7 @@ internal static class ReportPage
             "Layers, bottom to top. Optical density: decadic, dots and host, along the normal at the source's peak",
             ["layer", "thickness / µm", "coat weight / g/m²", "optical density", "refractive index"],
             ReportTables.Layers(filmCase.Film, appraisal)),
+        .. figures.TryGetValue("loading-map", out var map) ? [new Figure(map)] : Array.Empty<Block>(),
         new Figure(figures["lots"]),
     ];
 

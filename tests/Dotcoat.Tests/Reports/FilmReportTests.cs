@@ -31,7 +31,7 @@ public sealed class FilmReportTests
     public void Write_GivesAPageTheDocumentAndEachChartTwice() => Assert.Equal(
         (string[])[
             "chromaticity-1931.png", "chromaticity-1931.svg", "chromaticity-1976.png", "chromaticity-1976.svg", "lots.png", "lots.svg",
-            "photon-fates.png", "photon-fates.svg", "report.html", "simulate.json", "spectrum.png", "spectrum.svg",
+            "photon-fates.png", "photon-fates.svg", "report.html", "report.pdf", "simulate.json", "spectrum.png", "spectrum.svg",
         ],
         Files("desk-monitor").Select(f => f.Name).Order(StringComparer.Ordinal).ToArray());
 
