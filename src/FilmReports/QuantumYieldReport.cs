@@ -1,5 +1,4 @@
 using System.Globalization;
-using System.Text;
 using FilmDesign;
 using FilmOptics;
 using FilmReports.Charts;
@@ -11,7 +10,7 @@ namespace FilmReports;
 /// <summary>A quantum yield with its scans, as a page and as pictures.</summary>
 public static class QuantumYieldReport
 {
-    /// <summary>report.html, sphere-scans.png and sphere-scans.svg.</summary>
+    /// <summary>report.html, report.pdf, sphere-scans.png and sphere-scans.svg.</summary>
     /// <param name="measurement">The scans.</param>
     /// <param name="yield">What they give.</param>
     /// <param name="fit">The yield in film; null where the sample is no film.</param>
@@ -19,25 +18,23 @@ public static class QuantumYieldReport
     {
         ArgumentNullException.ThrowIfNull(measurement);
         ArgumentNullException.ThrowIfNull(yield);
-        var drawing = SphereScansChart.Of(measurement, yield, Palette.Light);
-        return
-        [
-            Text("report.html", Page(measurement, yield, fit, drawing)),
-            new("sphere-scans.png", CanvasRenderer.Png(drawing, Palette.Light.Ground)),
-            Text("sphere-scans.svg", SvgRenderer.Write(drawing, Palette.Light.Ground, standalone: true)),
-        ];
+        return [.. ReportFiles.Of(ReportRequest.Everything, palette => Text(measurement, yield, fit, SphereScansChart.Of(measurement, yield, palette)))];
     }
 
-    private static string Page(SphereMeasurement measurement, SphereYield yield, FilmYieldFit? fit, Drawing drawing)
+    private static ReportText Text(SphereMeasurement measurement, SphereYield yield, FilmYieldFit? fit, Drawing drawing)
     {
-        using var page = new PageWriter($"Quantum yield of {measurement.InBeam.Name}");
-        page.Heading(1, $"Quantum yield of {measurement.InBeam.Name}");
-        page.Paragraph(Finding(yield, fit));
-        page.Table("Figures", ["figure", "value", "standard uncertainty"], Rows(yield, fit));
-        page.Figure(drawing);
-        foreach (string warning in yield.Warnings)
-            page.Paragraph(warning);
-        return page.Finish();
+        string title = $"Quantum yield of {measurement.InBeam.Name}";
+        return new(
+            title,
+            Date: null,
+            [
+                new Heading(1, title),
+                new Paragraph(Finding(yield, fit), ParagraphRole.Found),
+                Table.Of("Figures", ["figure", "value", "standard uncertainty"], Rows(yield, fit)),
+                new Figure(drawing),
+                .. yield.Warnings.Select(warning => new Paragraph(warning)),
+            ],
+            [drawing]);
     }
 
     /// <summary>The finding in a sentence.</summary>
@@ -55,25 +52,23 @@ public static class QuantumYieldReport
         ArgumentNullException.ThrowIfNull(yield);
         List<IReadOnlyList<string>> rows =
         [
-            [fit is null ? "quantum yield, observed" : "external yield", Figure(yield.YieldShare, 4), Figure(yield.YieldUncertaintyShare, 4)],
-            ["absorptance", Figure(yield.AbsorptanceShare, 4), Figure(yield.AbsorptanceUncertaintyShare, 4)],
+            [fit is null ? "quantum yield, observed" : "external yield", Fixed(yield.YieldShare, 4), Fixed(yield.YieldUncertaintyShare, 4)],
+            ["absorptance", Fixed(yield.AbsorptanceShare, 4), Fixed(yield.AbsorptanceUncertaintyShare, 4)],
         ];
         if (yield.SelfAbsorption is { } self)
         {
-            rows.Add(["emission re-absorbed", Figure(self.ReabsorbedShare, 4), ""]);
-            rows.Add(["quantum yield without that", Figure(self.YieldShare, 4), Figure(self.YieldUncertaintyShare, 4)]);
+            rows.Add(["emission re-absorbed", Fixed(self.ReabsorbedShare, 4), ""]);
+            rows.Add(["quantum yield without that", Fixed(self.YieldShare, 4), Fixed(self.YieldUncertaintyShare, 4)]);
         }
 
         if (fit is not null)
         {
-            rows.Add(["film_yield_factor", Figure(fit.FilmYieldFactor, 4), Figure(fit.UncertaintyFactor, 4)]);
-            rows.Add(["absorptance, computed from the film file", Figure(fit.AbsorptanceShare, 4), ""]);
+            rows.Add(["film_yield_factor", Fixed(fit.FilmYieldFactor, 4), Fixed(fit.UncertaintyFactor, 4)]);
+            rows.Add(["absorptance, computed from the film file", Fixed(fit.AbsorptanceShare, 4), ""]);
         }
 
         return rows;
     }
 
-    private static string Figure(double value, int decimals) => value.ToString($"F{decimals}", CultureInfo.InvariantCulture);
-
-    private static ReportFile Text(string name, string text) => new(name, new UTF8Encoding(encoderShouldEmitUTF8Identifier: false).GetBytes(text));
+    private static string Fixed(double value, int decimals) => value.ToString($"F{decimals}", CultureInfo.InvariantCulture);
 }
