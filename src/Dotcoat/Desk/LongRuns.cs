@@ -28,7 +28,7 @@ internal sealed class LongRun : IDisposable
     public Task<FilmAppraisal> Work { get; }
 
     /// <summary>How much is done, 0…1.</summary>
-    public double DoneShare => Work.IsCompletedSuccessfully ? 1 : _progress is { } progress ? (double)progress.PhotonsDone / Photons : 0;
+    public double DoneShare => Work.IsCompletedSuccessfully ? (double)Work.Result.Output.Tracing!.Photons / Photons : _progress is { } progress ? (double)progress.PhotonsDone / Photons : 0;
 
     public void Stop() => _stop.Cancel();
 
