@@ -27,7 +27,7 @@ internal static class AngleChart
         ];
         var colour = new ChartFrame(
             new("", "Change of colour from the normal", ""),
-            across, Axis.Holding("change of u′ and v′", shifts.SelectMany(shift => shift.Points).Select(point => point.Y).Append(0), 4), palette, height: FieldHeight);
+            across, Axis.Holding("change of u′ and v′", shifts.SelectMany(shift => shift.Points).Select(point => point.Y).Append(0), 4, 0.004), palette, height: FieldHeight);
         Lines.Draw(colour.Plot, shifts, palette);
         var upper = luminance.Finish();
         return upper.Above(colour.Finish());

@@ -1,4 +1,5 @@
 using System.Globalization;
+using Colorimetry;
 using FilmOptics;
 using FilmReports.Drawings;
 
@@ -7,7 +8,7 @@ namespace FilmReports.Charts;
 /// <summary>The halo of one lit square zone of a dimmed backlight: luminance and colour against the distance from its centre.</summary>
 internal static class ZoneChart
 {
-    private const double FieldHeight = 210, SmallHeight = 130, LeastLuminance = 1e-4;
+    private const double FieldHeight = 200, SmallHeight = 110, LeastLuminance = 1e-4;
 
     // Of a full backlight: below it the colour is that of a few photons.
     private const double ColouredLuminance = 3e-4;
@@ -28,31 +29,40 @@ internal static class ZoneChart
                 string.Join(' ', profiles.Select(p => $"{p.Name}: {Spread(p.Profile)}")),
                 "luminance 1: backlight lit everywhere"),
             across, new("relative luminance", LeastLuminance, 2, 1, IsLog: true), palette, height: FieldHeight);
-        var colour = new ChartFrame(
-            new("", "Colour, Δv′ from the centre of the zone", "", "below 0 is bluer, above 0 is yellower"),
-            across, Axis.Holding("change of v′", profiles.SelectMany(p => Shift(p.Profile)).Select(point => point.V).Append(0), 4), palette, height: SmallHeight);
-        foreach (var plot in (Plot[])[luminance.Plot, colour.Plot])
-            Edge(plot, zoneMm / 2, palette);
+        Edge(luminance.Plot, zoneMm / 2, palette, "edge of the zone");
         Lines.Draw(luminance.Plot, [.. profiles.Select((p, i) => new NamedLine(
             p.Name, [.. p.Profile.Points.Where(point => point.LuminanceShare > 0).Select(point => (point.DistanceMm, point.LuminanceShare))], Lines.StrokeOf(i, palette)))], palette);
-        Lines.Draw(colour.Plot, [.. profiles.Select((p, i) => new NamedLine(p.Name, Shift(p.Profile), Lines.StrokeOf(i, palette)))], palette);
-        return luminance.Finish().Above(colour.Finish());
+        return luminance.Finish()
+            .Above(Colour("u′", "above 0 is redder", c => c.UPrime))
+            .Above(Colour("v′", "below 0 is bluer, above 0 is yellower", c => c.VPrime));
+
+        Drawing Colour(string coordinate, string meaning, Func<Chromaticity, double> value)
+        {
+            NamedLine[] lines = [.. profiles.Select((p, i) => new NamedLine(p.Name, Shift(p.Profile, value), Lines.StrokeOf(i, palette)))];
+            var frame = new ChartFrame(
+                new("", $"Change of {coordinate} from the centre of the zone", "", meaning),
+                across, Axis.Holding($"change of {coordinate}", lines.SelectMany(line => line.Points).Select(point => point.Y).Append(0), 4, 0.02), palette, height: SmallHeight);
+            Edge(frame.Plot, zoneMm / 2, palette, name: null);
+            Lines.Draw(frame.Plot, lines, palette);
+            return frame.Finish();
+        }
     }
 
-    private static void Edge(Plot plot, double edgeMm, Palette palette)
+    private static void Edge(Plot plot, double edgeMm, Palette palette, string? name)
     {
         Spot top = plot.At(edgeMm, plot.Y.To), foot = plot.At(edgeMm, plot.Y.From);
         plot.Inside(new Shape([top, foot], Closed: false, null, 1, new Stroke(palette.Faint, 0.9, [2, 2])));
-        plot.Over(plot.Labels.Place("edge of the zone", top, 8.5, palette.Faint, palette.Ground, 8, (1, 1)));
+        if (name is not null)
+            plot.Over(plot.Labels.Place(name, top, 8.5, palette.Faint, palette.Ground, 8, (1, 1)));
     }
 
-    private static (double X, double V)[] Shift(ZoneProfile profile)
+    private static (double X, double Y)[] Shift(ZoneProfile profile, Func<Chromaticity, double> value)
     {
         var centre = profile.Points[0].Chromaticity;
         return centre is not { } from ? [] :
         [
             .. profile.Points.Where(point => point.Chromaticity is not null && point.LuminanceShare >= ColouredLuminance)
-                .Select(point => (point.DistanceMm, point.Chromaticity!.Value.VPrime - from.VPrime)),
+                .Select(point => (point.DistanceMm, value(point.Chromaticity!.Value) - value(from))),
         ];
     }
 

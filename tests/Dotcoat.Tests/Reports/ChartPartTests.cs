@@ -96,6 +96,13 @@ public sealed class ChartPartTests
     }
 
     [Fact]
+    public void Axis_OfRoundingNoise_SpansTheLeast()
+    {
+        var axis = Axis.Holding("x", [0, 1e-16, -2e-16], 4, 0.02);
+        Assert.True(axis.To - axis.From is >= 0.02 and < 0.05, axis.ToString());
+    }
+
+    [Fact]
     public void Bars_EndAtTheirValuesWithWhiskersOfTheirErrors()
     {
         var drawing = ABarChart(Palette.Light);

@@ -88,7 +88,7 @@ public sealed class LateralSpread
     /// <summary>Light and colour across one lit square zone, from its centre outwards along its middle line.</summary>
     /// <param name="zoneMm">Side of the zone, mm, above 0.</param>
     /// <param name="observer">Observer for luminance and colour.</param>
-    /// <param name="distancesMm">Distances from the centre, mm; null takes 121 as far as 99 % of the light strays.</param>
+    /// <param name="distancesMm">Distances from the centre, mm; null takes 121 as far as 99 % of the light strays, over the next zone at most.</param>
     public ZoneProfile AcrossZone(double zoneMm, StandardObserver observer, IReadOnlyList<double>? distancesMm = null)
     {
         ArgumentNullException.ThrowIfNull(observer);
@@ -135,7 +135,7 @@ public sealed class LateralSpread
     private double[] DefaultDistances(double zoneMm)
     {
         const int points = 121;
-        double reach = (zoneMm / 2) + Math.Max(zoneMm / 20, RadiusHolding(0.99, _ => true).RadiusMm);
+        double reach = (zoneMm / 2) + Math.Clamp(RadiusHolding(0.99, _ => true).RadiusMm, zoneMm / 20, zoneMm);
         return [.. Enumerable.Range(0, points).Select(i => reach * i / (points - 1))];
     }
 
