@@ -48,7 +48,7 @@ public sealed class AccessibilityTests(Browser browser)
         await desk.Page.Keyboard.PressAsync("Enter");
         await desk.ShownAsync();
         Assert.Equal("off", await desk.StateAsync());
-        await TabToAsync(desk.Page, "To target", back: true);
+        await TabToAsync(desk.Page, "White to target", back: true);
         await desk.Page.Keyboard.PressAsync("Enter");
         await Assertions.Expect(desk.Page.Locator("#answer")).ToHaveAttributeAsync("data-state", "on", new() { Timeout = 60_000 });
         await TabToAsync(desk.Page, "u′v′ 1976");

@@ -33,7 +33,7 @@ public sealed class DeskPageTests(Browser browser)
         await desk.ShownAsync();
         Assert.Equal("off", await desk.StateAsync());
         string loading = await desk.Field("Loading green K07").InputValueAsync();
-        await desk.Button("To target").ClickAsync();
+        await desk.Button("White to target").ClickAsync();
         await Assertions.Expect(desk.Page.Locator("#answer")).ToHaveAttributeAsync("data-state", "on", new() { Timeout = 60_000 });
         Assert.StartsWith("White is on target", await desk.TextAsync("#message"), StringComparison.Ordinal);
         Assert.NotEqual(loading, await desk.Field("Loading green K07").InputValueAsync(), StringComparer.Ordinal);
@@ -182,7 +182,7 @@ public sealed class DeskPageTests(Browser browser)
     public async Task Trace_ShowsProgress_CanBeStopped_AndAgreesWithTheExactFigures()
     {
         await using var desk = await DeskPage.OpenAsync(browser);
-        await desk.Button("Trace…").ClickAsync();
+        await desk.Button("Trace photons…").ClickAsync();
         await desk.Page.Locator("#trace-photons").FillAsync("1000000000");
         await desk.Page.Locator("#trace-dialog button[value=go]").ClickAsync();
         await DeskPage.UntilAsync(desk.Page, "document.getElementById('trace-progress').value > 0");

@@ -31,7 +31,7 @@ internal static class EdgeLabel
                 foreach (double side in new[] { 1.0, -1.0 })
                 {
                     var start = new Spot(from.X + (dx * along) + (side * dy * Offset), from.Y + (dy * along) - (side * dx * Offset));
-                    if (Boxes(start, dx, dy, width).Any(box => labels.Taken.Any(box.Overlaps)))
+                    if (IsTaken(labels, start, dx, dy, width))
                         continue;
                     double clearance = Math.Min(EnoughClearance, Clearance(start, dx, dy, width, own, triangles));
                     if (best is null || clearance > best.Value.Clearance + 0.5)
@@ -57,6 +57,18 @@ internal static class EdgeLabel
     {
         for (double t = 0; t <= width; t += 5)
             yield return Box.About(new(start.X + (dx * t), start.Y + (dy * t)), 4.5);
+    }
+
+    // A picture asks this thousands of times.
+    private static bool IsTaken(LabelPlacer labels, Spot start, double dx, double dy, double width)
+    {
+        for (double t = 0; t <= width; t += 5)
+        {
+            if (labels.IsTaken(Box.About(new(start.X + (dx * t), start.Y + (dy * t)), 4.5)))
+                return true;
+        }
+
+        return false;
     }
 
     private static double Clearance(Spot start, double dx, double dy, double width, int own, IReadOnlyList<Spot[]> triangles)

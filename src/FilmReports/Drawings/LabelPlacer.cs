@@ -1,3 +1,5 @@
+using System.Runtime.InteropServices;
+
 namespace FilmReports.Drawings;
 
 /// <summary>Puts labels where they cover neither each other nor what must stay visible, and inside the drawing.</summary>
@@ -16,6 +18,18 @@ internal sealed class LabelPlacer(Box area)
 
     /// <summary>Every box that a label has taken, in the order of placing.</summary>
     public IReadOnlyList<Box> Taken => _taken;
+
+    /// <summary>Whether a label or what must stay visible lies there.</summary>
+    public bool IsTaken(Box box)
+    {
+        foreach (ref readonly var taken in CollectionsMarshal.AsSpan(_taken))
+        {
+            if (taken.Overlaps(box))
+                return true;
+        }
+
+        return false;
+    }
 
     /// <summary>Keeps labels off a place.</summary>
     public void KeepOff(Box box) => _taken.Add(box);
@@ -58,7 +72,7 @@ internal sealed class LabelPlacer(Box area)
                 double left = dx > 0.3 ? x : dx < -0.3 ? x - width : x - (width / 2);
                 double top = dy > 0.3 ? y : dy < -0.3 ? y - height : y - (height / 2);
                 var box = new Box(left - 1, top - 1, left + width + 1, top + height + 1);
-                if (!area.Contains(box) || _taken.Exists(box.Overlaps))
+                if (!area.Contains(box) || IsTaken(box))
                     continue;
                 _taken.Add(box);
                 var words = new Words(text, new(left, top + (height * 0.8)), TextAnchor.Start, size, weight, colour, Halo: halo);

@@ -13,6 +13,7 @@ const film = new Film(description, tab);
 let theme = sessionStorage.getItem('theme') ?? (matchMedia('(prefers-color-scheme: dark)').matches ? 'dark' : 'light');
 let diagram = sessionStorage.getItem('diagram') ?? 'chromaticity-1976';
 let shown = null;
+let good = null;
 let isAsking = false;
 let isStale = false;
 let wanted = 0;
@@ -77,8 +78,11 @@ async function solve() {
   do {
     isStale = false;
     const round = wanted;
+    const asked = request({ charts: ['spectrum', diagram] });
+    const state = structuredClone(film.live);
     try {
-      show(await post('solve', request({ charts: ['spectrum', diagram] })));
+      show(await post('solve', asked));
+      good = state;
       document.body.dataset.shown = String(round);
     } catch (refused) {
       if (!(refused instanceof Refusal)) throw refused;
@@ -86,10 +90,27 @@ async function solve() {
       by('answer').textContent = rest.length > 0 ? rest.map(fault => fault.message).join(' ') : 'A field holds no value that the film can have; the figures are those of the last film that could be solved.';
       by('answer').classList.add('wrong');
       by('answer').dataset.state = 'refused';
+      await redraw();
     }
     await new Promise(resolve => requestAnimationFrame(resolve));
   } while (isStale);
   isAsking = false;
+}
+
+// Another diagram or theme while a field is wrong: drawn of the last film that could be solved.
+async function redraw() {
+  if (good === null || by('diagram').dataset.drawn === `${theme} ${diagram}`) return;
+  draw((await post('solve', request({ state: good, charts: ['spectrum', diagram] }))).charts);
+}
+
+function draw(charts) {
+  for (const [name, svg] of Object.entries(charts)) {
+    if (name === 'spectrum') chart(by('spectrum'), name, theme, svg);
+    else if (name === diagram) {
+      chart(by('diagram'), name, theme, svg);
+      by('diagram').dataset.drawn = `${theme} ${name}`;
+    }
+  }
 }
 
 function show(reply) {
@@ -99,10 +120,7 @@ function show(reply) {
   by('answer').textContent = reply.answer;
   by('answer').classList.remove('wrong');
   by('answer').dataset.state = reply.onTarget === null ? 'none' : reply.onTarget ? 'on' : 'off';
-  for (const [name, svg] of Object.entries(reply.charts)) {
-    if (name === 'spectrum') chart(by('spectrum'), name, theme, svg);
-    else if (name === diagram) chart(by('diagram'), name, theme, svg);
-  }
+  draw(reply.charts);
   figures();
   for (const name of tableNames) {
     const found = reply.tables.find(one => one.name === name);
@@ -171,9 +189,7 @@ for (const one of document.querySelectorAll('[role="tab"]')) {
 }
 
 for (const id of ['spectrum', 'diagram']) {
-  const enlarge = element('button', { type: 'button', className: 'quiet enlarge' }, 'Enlarge');
-  enlarge.setAttribute('aria-label', `Enlarge the ${id}`);
-  enlarge.addEventListener('click', () => {
+  by(`enlarge-${id}`).addEventListener('click', () => {
     const picture = by(id).querySelector('.picture')?.cloneNode(true);
     const svg = picture?.querySelector('svg');
     if (!svg) return;
@@ -184,7 +200,6 @@ for (const id of ['spectrum', 'diagram']) {
     by('large-chart').replaceChildren(picture);
     open('large');
   });
-  by(id).append(enlarge);
 }
 
 by('undo').addEventListener('click', () => { film.undo(); inputs.show(film); buttons(); solve(); });
