@@ -7,6 +7,7 @@ internal sealed class LotSection
 {
     private readonly Section _section;
     private readonly Node? _absorbance;
+    private readonly DescribedDot? _described;
     private readonly double _yieldShare, _yieldFactor, _extinctionFactor, _shiftNm;
     private readonly double? _densityGPerMl, _cadmiumShare, _leadShare, _pricePerG, _stockWtPercent;
 
@@ -15,7 +16,8 @@ internal sealed class LotSection
         _section = section;
         Name = section.RequiredText("name") ?? "";
         section.Path = Name.Length > 0 ? $"lots[{Name}]" : $"lots[{index}]";
-        _absorbance = section.Required("absorbance");
+        _described = DescribedDotSection.Read(section, loader);
+        _absorbance = section.Has("material") ? null : section.Required("absorbance");
         _yieldShare = section.RequiredNumber("quantum_yield", NumberRule.Share);
         _yieldFactor = section.Number("film_yield_factor", NumberRule.AboveZero, 1);
         _extinctionFactor = section.Number("film_extinction_factor", NumberRule.AboveZero, 1);
@@ -39,7 +41,8 @@ internal sealed class LotSection
 
         _pricePerG = section.OptionalNumber("price_per_g", NumberRule.AtLeastZero);
         _stockWtPercent = section.OptionalNumber("stock_wt_percent", NumberRule.StockWtPercent);
-        Emission = section.Required("emission") is { } emission
+        Emission = section.Has("material") ? DescribedEmission()
+            : section.Required("emission") is { } emission
             ? loader.Light(emission, section.PathOf("emission"), SpectrumKind.Emission, double.IsFinite(_shiftNm) ? _shiftNm : 0)
             : null;
         section.Close();
@@ -54,7 +57,8 @@ internal sealed class LotSection
     /// <summary>The lot, or null after a fault.</summary>
     public DotLot? Lot(SpectrumLoader loader)
     {
-        var absorbance = _absorbance is null
+        var absorbance = _described is not null ? DescribedAbsorbance()
+            : _absorbance is null
             ? null
             : loader.Spectrum<AbsorbancePerCm>(_absorbance, _section.PathOf("absorbance"), SpectrumKind.Absorbance);
         if (absorbance is null || Emission is null)
@@ -75,4 +79,9 @@ internal sealed class LotSection
             StockWtPercent = _stockWtPercent,
         };
     }
+
+    private Spectrum<PhotonPerNm>? DescribedEmission() =>
+        _described is null || double.IsNaN(_shiftNm) ? null : DescribedDotSection.Computed(_section, () => _described.Emission(_shiftNm));
+
+    private Spectrum<AbsorbancePerCm>? DescribedAbsorbance() => DescribedDotSection.Computed(_section, () => _described!.Absorbance());
 }

@@ -22,6 +22,12 @@ internal sealed record NumberRule(double Low, double High, string Words, bool Is
     public static readonly NumberRule WtPercent = new(0, 100, "at least 0, below 100 %", IsHighOpen: true);
     public static readonly NumberRule StockWtPercent = new(0, 100, "above 0, to 100 %", IsLowOpen: true);
     public static readonly NumberRule DensityGPerMl = new(0, 25, "above 0, to 25 g/mL", IsLowOpen: true);
+    public static readonly NumberRule DotDiameterNm = new(1, 20, "1 to 20 nm");
+    public static readonly NumberRule ShellNm = new(0, 20, "above 0, to 20 nm", IsLowOpen: true);
+    public static readonly NumberRule SpreadPercent = new(0, 30, "0 to 30 %");
+    public static readonly NumberRule FwhmMev = new(10, 500, "10 to 500 meV");
+    public static readonly NumberRule StokesNm = new(-20, 150, "-20 to 150 nm");
+    public static readonly NumberRule ShareAboveZero = new(0, 1, "above 0, to 1", IsLowOpen: true);
     public static readonly NumberRule ShapePeakNm = new(360, 830, "360 to 830 nm");
     public static readonly NumberRule ShiftNm = new(-200, 200, "-200 to 200 nm");
 
