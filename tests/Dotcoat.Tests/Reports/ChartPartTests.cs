@@ -113,6 +113,17 @@ public sealed class ChartPartTests
         Assert.Equal(2 * 0.012 * perUnit, whisker.Spots[1].X - whisker.Spots[0].X, 1e-9);
     }
 
+    // Greyscale and colour-blind readers: nothing hangs on hue.
+    [Fact]
+    public void Strokes_WithoutTheirHue_AreStillDifferent()
+    {
+        var lights = new[] { 450.0, 530, 630 }.Select(peakNm => Palette.Light.OfEmitter(peakNm)).ToList();
+        Assert.Equal(3, lights.Select(light => light.Mark).Distinct().Count());
+        Assert.Equal(3, lights.Select(light => string.Join(' ', light.Dash ?? [])).Distinct(StringComparer.Ordinal).Count());
+        var films = Enumerable.Range(0, 6).Select(i => Lines.StrokeOf(i, Palette.Light)).ToList();
+        Assert.Equal(6, films.Select(stroke => $"{stroke.Width} {string.Join(' ', stroke.Dash ?? [])}").Distinct(StringComparer.Ordinal).Count());
+    }
+
     [Fact]
     public void LogPlot_ThereAndBack_IsTheSameValue()
     {
