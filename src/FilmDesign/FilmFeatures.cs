@@ -45,6 +45,6 @@ internal static class FilmFeatures
                 .GroupBy(dots => dots.Lot.Name, StringComparer.Ordinal)
                 .Select(lot => new DotLoading(lot.First().Lot, lot.Sum(dots => dots.Amount) / thicknessMm)),
         ];
-        return EachLayer(film, layer => layer.Dots.Count > 0 ? layer with { Dots = everywhere } : layer);
+        return EachLayer(film, layer => layer.Dots.Count > 0 ? layer.WithDots(everywhere) : layer);
     }
 }

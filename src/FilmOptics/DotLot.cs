@@ -29,6 +29,9 @@ public sealed record DotLot
     /// <summary>Shift of the emission line from dilute to film, nm; already in <see cref="Emission"/>.</summary>
     public double FilmEmissionShiftNm { get; init; }
 
+    /// <summary>What the dots scatter by themselves (clumps), 1/mm at 1 mg/mL, at least 0; it has the anisotropy of the layer.</summary>
+    public double ScatteringPerMmPerMgPerMl { get; init; }
+
     /// <summary>Density of the dots with their ligand, g/mL; null where unknown.</summary>
     public double? DensityGPerMl { get; init; }
 

@@ -35,10 +35,8 @@ public sealed record Film
         ArgumentNullException.ThrowIfNull(loadingMgPerMl);
         return this with
         {
-            Layers = [.. Layers.Select(layer => layer with
-            {
-                Dots = [.. layer.Dots.Select(dots => dots with { LoadingMgPerMl = loadingMgPerMl(layer, dots) })],
-            })],
+            Layers = [.. Layers.Select(layer =>
+                layer.WithDots([.. layer.Dots.Select(dots => dots with { LoadingMgPerMl = loadingMgPerMl(layer, dots) })]))],
         };
     }
 

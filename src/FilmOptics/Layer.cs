@@ -17,7 +17,7 @@ public sealed record Layer
     /// <summary>Absorption of the host alone, 1/mm, base e.</summary>
     public required Spectrum<PerMm> HostAbsorption { get; init; }
 
-    /// <summary>Scattering coefficient, 1/mm.</summary>
+    /// <summary>Scattering coefficient, 1/mm, of host and dots together.</summary>
     public required Spectrum<PerMm> Scattering { get; init; }
 
     /// <summary>Henyey–Greenstein anisotropy g, between −1 and 1.</summary>
@@ -28,6 +28,21 @@ public sealed record Layer
 
     /// <summary>Density of the cured host, g/mL; null where unknown. Mass loadings and coat weights need it.</summary>
     public double? HostDensityGPerMl { get; init; }
+
+    /// <summary>The same layer with other dots: what the old ones scattered goes, what the new ones scatter comes.</summary>
+    /// <param name="dots">The dots; a lot once.</param>
+    public Layer WithDots(IReadOnlyList<DotLoading> dots)
+    {
+        double changePerMm = dots.Sum(dot => dot.ScatteringPerMm) - Dots.Sum(dot => dot.ScatteringPerMm);
+        return this with
+        {
+            Dots = dots,
+
+            // The same spectrum where nothing changes: models share their tables by it. Rounding must not leave less than nothing.
+            Scattering = changePerMm == 0 ? Scattering
+                : Spectrum.FromSamples<PerMm>([.. Scattering.Samples.ToArray().Select(perMm => Math.Max(0, perMm + changePerMm))], Scattering.Source),
+        };
+    }
 }
 
 /// <summary>A lot in a layer.</summary>
@@ -39,6 +54,9 @@ public sealed record DotLoading(DotLot Lot, double LoadingMgPerMl)
     /// <param name="wavelengthIndex">Index on <see cref="WavelengthGrid"/>.</param>
     public double AbsorptionPerMm(int wavelengthIndex) =>
         Lot.Absorbance.Samples[wavelengthIndex] * AbsorptionPerMmPerAbsorbance;
+
+    /// <summary>What these dots scatter, 1/mm.</summary>
+    public double ScatteringPerMm => Lot.ScatteringPerMmPerMgPerMl * LoadingMgPerMl;
 
     /// <summary>What the dilute absorbance is multiplied with to give 1/mm in this layer.</summary>
     internal double AbsorptionPerMmPerAbsorbance =>

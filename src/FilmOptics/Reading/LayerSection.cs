@@ -41,6 +41,7 @@ internal sealed class LayerSection
         }
 
         if (dots is null || absorption is null || scattering is null || name is null || double.IsNaN(anisotropy)
+            || dots.Any(dot => double.IsNaN(dot.ScatteringPerMm))
             || (particles is null && _section.Has("particles")))
         {
             return null;
@@ -54,9 +55,9 @@ internal sealed class LayerSection
             HostAbsorption = absorption,
             Scattering = particles?.Scattering ?? scattering,
             Anisotropy = particles?.Anisotropy ?? Spectrum.Flat<MeanCosine>(anisotropy, "film file"),
-            Dots = dots,
+            Dots = [],
             HostDensityGPerMl = _parts.HostDensityGPerMl,
-        };
+        }.WithDots(dots);
         if (Loadings.DotVolumeShare(layer) is >= 1 and var share)
         {
             _section.Fault("dots", $"{_section.PathOf("dots")} fill {Shown.Number(100 * share)} % of the layer's volume; below 100 % is allowed.");

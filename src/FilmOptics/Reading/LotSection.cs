@@ -10,6 +10,7 @@ internal sealed class LotSection
     private readonly DescribedDot? _described;
     private readonly double _yieldShare, _yieldFactor, _extinctionFactor, _shiftNm;
     private readonly double? _densityGPerMl, _cadmiumShare, _leadShare, _pricePerG, _stockWtPercent;
+    private readonly double _scatteringPerMmPerMgPerMl;
 
     public LotSection(Section section, int index, SpectrumLoader loader)
     {
@@ -41,6 +42,7 @@ internal sealed class LotSection
 
         _pricePerG = section.OptionalNumber("price_per_g", NumberRule.AtLeastZero);
         _stockWtPercent = section.OptionalNumber("stock_wt_percent", NumberRule.StockWtPercent);
+        _scatteringPerMmPerMgPerMl = section.Number("scattering_per_mm_per_mg_per_ml", NumberRule.AtLeastZero, 0);
         Emission = section.Has("material") ? DescribedEmission()
             : section.Required("emission") is { } emission
             ? loader.Light(emission, section.PathOf("emission"), SpectrumKind.Emission, double.IsFinite(_shiftNm) ? _shiftNm : 0)
@@ -77,6 +79,7 @@ internal sealed class LotSection
             LeadMassShare = _leadShare,
             PricePerG = _pricePerG,
             StockWtPercent = _stockWtPercent,
+            ScatteringPerMmPerMgPerMl = _scatteringPerMmPerMgPerMl,
         };
     }
 
