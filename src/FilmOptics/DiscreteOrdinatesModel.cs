@@ -11,7 +11,7 @@ public sealed class DiscreteOrdinatesModel : IFilmModel
     // The finer of two efforts is within this many of their differences of the truth in at least 95 of 100 random films (tests); never less than rounding.
     private const double EstimateFactor = 3, RoundingShare = 1e-12;
 
-    // Measured: sums over a spectrum miss less than a hundredth of what the tail of a table's polynomials may.
+    // Measured: sums over a spectrum miss a third of the tail of a table's polynomials at worst, a hundredth or less mostly.
     private const double TailOfAccuracy = 0.1;
 
     private static readonly Effort[] Quick = [new(4, 4, 10), new(6, 8, 8), new(8, 8, 5), new(10, 16, 3), new(16, 32, 1)];

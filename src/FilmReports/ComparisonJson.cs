@@ -20,14 +20,11 @@ public static class ComparisonJson
             Differences(json, comparison);
             Features(json, comparison);
             json.WriteStartObject("suggested_beer_lambert");
-            Number(json, "pump_path", comparison.SuggestedPaths.PumpPathFactor);
-            Number(json, "emission_path", comparison.SuggestedPaths.EmissionPathFactor);
-            Number(json, "white_error_uv", comparison.SuggestedWhiteErrorUv);
+            json.Number("pump_path", comparison.SuggestedPaths.PumpPathFactor);
+            json.Number("emission_path", comparison.SuggestedPaths.EmissionPathFactor);
+            json.Number("white_error_uv", comparison.SuggestedWhiteErrorUv);
             json.WriteEndObject();
-            json.WriteStartArray("warnings");
-            foreach (string warning in comparison.Models.SelectMany(m => m.Warnings).Distinct(StringComparer.Ordinal))
-                json.WriteStringValue(warning);
-            json.WriteEndArray();
+            json.Sentences("warnings", comparison.Models.SelectMany(m => m.Warnings).Distinct(StringComparer.Ordinal));
         });
     }
 
@@ -52,7 +49,7 @@ public static class ComparisonJson
             json.WriteNumber("lost_in_lots", budget.LostInLots.Sum());
             json.WriteNumber("lumens_per_source_watt", model.FilmLumensPerSourceWatt);
             json.WriteNumber("energy", model.Efficiency.EnergyShare);
-            Number(json, "stated_error", model.Output.Accuracy?.EstimateShare);
+            json.Number("stated_error", model.Output.Accuracy?.EstimateShare);
             json.WriteEndObject();
         }
 
@@ -70,7 +67,7 @@ public static class ComparisonJson
             json.WriteNumber("reference", difference.ReferenceValue);
             json.WriteNumber("value", difference.Value);
             json.WriteNumber("difference", difference.Difference);
-            Number(json, "stated_error", difference.StatedErrorShare);
+            json.Number("stated_error", difference.StatedErrorShare);
             if (difference.IsExplained is { } explained)
                 json.WriteBoolean("explained", explained);
             else
@@ -97,13 +94,5 @@ public static class ComparisonJson
         }
 
         json.WriteEndArray();
-    }
-
-    private static void Number(Utf8JsonWriter json, string key, double? value)
-    {
-        if (value is { } number)
-            json.WriteNumber(key, number);
-        else
-            json.WriteNull(key);
     }
 }

@@ -1,4 +1,3 @@
-using System.Text.Json;
 using FilmOptics;
 
 namespace FilmReports;
@@ -46,29 +45,13 @@ public static class DotJson
             }
 
             json.WriteEndArray();
-            Number(json, "extinction_350_nm_per_m_per_cm", dot.Extinction350PerMPerCm);
-            Number(json, "spread_fwhm_mev", dot.SpreadFwhmMev);
-            Number(json, "total_fwhm_mev", dot.TotalFwhmMev);
-            Number(json, "total_fwhm_nm", dot.TotalFwhmNm);
-            Number(json, "heat_shift_nm", dot.HeatShiftNm);
-            Sentences(json, "sources", dot.Sources);
-            Sentences(json, "warnings", dot.Warnings);
+            json.Number("extinction_350_nm_per_m_per_cm", dot.Extinction350PerMPerCm);
+            json.Number("spread_fwhm_mev", dot.SpreadFwhmMev);
+            json.Number("total_fwhm_mev", dot.TotalFwhmMev);
+            json.Number("total_fwhm_nm", dot.TotalFwhmNm);
+            json.Number("heat_shift_nm", dot.HeatShiftNm);
+            json.Sentences("sources", dot.Sources);
+            json.Sentences("warnings", dot.Warnings);
         });
-    }
-
-    private static void Number(Utf8JsonWriter json, string key, double? value)
-    {
-        if (value is { } number)
-            json.WriteNumber(key, number);
-        else
-            json.WriteNull(key);
-    }
-
-    private static void Sentences(Utf8JsonWriter json, string key, IReadOnlyList<string> sentences)
-    {
-        json.WriteStartArray(key);
-        foreach (string sentence in sentences)
-            json.WriteStringValue(sentence);
-        json.WriteEndArray();
     }
 }

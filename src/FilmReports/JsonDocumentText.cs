@@ -22,4 +22,22 @@ internal static class JsonDocumentText
 
         return Encoding.UTF8.GetString(bytes.GetBuffer(), 0, (int)bytes.Length) + "\n";
     }
+
+    /// <summary>A number, or null where it is not known. The writer refuses NaN and infinity itself: neither ever passes for a number.</summary>
+    public static void Number(this Utf8JsonWriter json, string key, double? value)
+    {
+        if (value is { } number)
+            json.WriteNumber(key, number);
+        else
+            json.WriteNull(key);
+    }
+
+    /// <summary>A list of sentences.</summary>
+    public static void Sentences(this Utf8JsonWriter json, string key, IEnumerable<string> sentences)
+    {
+        json.WriteStartArray(key);
+        foreach (string sentence in sentences)
+            json.WriteStringValue(sentence);
+        json.WriteEndArray();
+    }
 }

@@ -53,10 +53,7 @@ public static class QuantumYieldJson
                 json.WriteEndObject();
             }
 
-            json.WriteStartArray("warnings");
-            foreach (string warning in yield.Warnings)
-                json.WriteStringValue(warning);
-            json.WriteEndArray();
+            json.Sentences("warnings", yield.Warnings);
         });
     }
 }

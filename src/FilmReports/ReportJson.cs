@@ -41,7 +41,7 @@ public static class ReportJson
         json.WriteString("model", appraisal.Output.Model);
         json.WriteStartObject("film");
         White(json, appraisal.FilmWhite);
-        Number(json, "lumens_per_source_watt", appraisal.FilmLumensPerSourceWatt);
+        json.Number("lumens_per_source_watt", appraisal.FilmLumensPerSourceWatt);
         json.WriteEndObject();
         Panel(json, appraisal.Panel);
         Gamut(json, appraisal.Gamut);
@@ -62,10 +62,7 @@ public static class ReportJson
             Zone(json, zone, spread);
         if (appraisal.Edge is { } edge)
             Edge(json, edge);
-        json.WriteStartArray("warnings");
-        foreach (string warning in appraisal.Warnings)
-            json.WriteStringValue(warning);
-        json.WriteEndArray();
+        json.Sentences("warnings", appraisal.Warnings);
     }
 
     private static void Solution(Utf8JsonWriter json, Formulation formulation)
@@ -75,12 +72,12 @@ public static class ReportJson
         foreach (var lot in formulation.Loadings.GroupBy(l => l.LotName, StringComparer.Ordinal))
         {
             foreach (var loading in lot)
-                Number(json, lot.Count() == 1 ? lot.Key : $"{lot.Key} @ {loading.LayerName}", loading.LoadingMgPerMl);
+                json.Number(lot.Count() == 1 ? lot.Key : $"{lot.Key} @ {loading.LayerName}", loading.LoadingMgPerMl);
         }
 
         json.WriteEndObject();
         json.WriteBoolean("reached", formulation.Reached);
-        Number(json, "white_error_xy", formulation.WhiteErrorXy);
+        json.Number("white_error_xy", formulation.WhiteErrorXy);
         json.WriteString("limit", formulation.Limit);
         json.WriteNumber("solves", formulation.Solves);
         json.WriteEndObject();
@@ -99,7 +96,7 @@ public static class ReportJson
         Colour(json, "red", panel.Red);
         Colour(json, "green", panel.Green);
         Colour(json, "blue", panel.Blue);
-        Number(json, "lumens_per_source_watt", panel.LumensPerSourceWatt);
+        json.Number("lumens_per_source_watt", panel.LumensPerSourceWatt);
         json.WriteEndObject();
     }
 
@@ -116,10 +113,10 @@ public static class ReportJson
         {
             json.WriteStartObject();
             json.WriteString("name", standard.Name);
-            Number(json, "coverage_xy", standard.CoverageXy);
-            Number(json, "coverage_uv", standard.CoverageUv);
-            Number(json, "area_ratio_xy", standard.AreaRatioXy);
-            Number(json, "area_ratio_uv", standard.AreaRatioUv);
+            json.Number("coverage_xy", standard.CoverageXy);
+            json.Number("coverage_uv", standard.CoverageUv);
+            json.Number("area_ratio_xy", standard.AreaRatioXy);
+            json.Number("area_ratio_uv", standard.AreaRatioUv);
             json.WriteEndObject();
         }
 
@@ -129,16 +126,16 @@ public static class ReportJson
     private static void Photons(Utf8JsonWriter json, string key, Film film, PhotonBudget budget, double? sum)
     {
         json.WriteStartObject(key);
-        Number(json, "unconverted", budget.Unconverted);
-        Number(json, "converted", budget.Converted);
-        Number(json, "lost_below", budget.LostBelow);
-        Number(json, "lost_above", budget.LostAbove);
-        Number(json, "lost_in_host", budget.LostInHost);
-        Number(json, "lost_at_edges", budget.LostAtEdges);
+        json.Number("unconverted", budget.Unconverted);
+        json.Number("converted", budget.Converted);
+        json.Number("lost_below", budget.LostBelow);
+        json.Number("lost_above", budget.LostAbove);
+        json.Number("lost_in_host", budget.LostInHost);
+        json.Number("lost_at_edges", budget.LostAtEdges);
         ByLot(json, "lost_in_lots", film, budget.LostInLots);
         ByLot(json, "source_absorbed_by", film, budget.SourceAbsorbedBy);
         ByLot(json, "excitations", film, budget.Excitations);
-        Number(json, "sum", sum);
+        json.Number("sum", sum);
         json.WriteEndObject();
     }
 
@@ -146,7 +143,7 @@ public static class ReportJson
     {
         json.WriteStartObject(key);
         for (int i = 0; i < film.Lots.Count; i++)
-            Number(json, film.Lots[i].Name, values[i]);
+            json.Number(film.Lots[i].Name, values[i]);
         json.WriteEndObject();
     }
 
@@ -157,9 +154,9 @@ public static class ReportJson
         {
             json.WriteStartObject();
             json.WriteString("name", band.Name);
-            Number(json, "photons", band.Photons);
-            Number(json, "peak_nm", band.PeakNm);
-            Number(json, "fwhm_nm", band.FwhmNm);
+            json.Number("photons", band.Photons);
+            json.Number("peak_nm", band.PeakNm);
+            json.Number("fwhm_nm", band.FwhmNm);
             json.WriteEndObject();
         }
 
@@ -173,9 +170,9 @@ public static class ReportJson
         {
             json.WriteStartObject();
             json.WriteString("name", layer.Name);
-            Number(json, "thickness_um", layer.ThicknessUm);
-            Number(json, "coat_weight_g_per_m2", layer.CoatWeightGPerM2);
-            Number(json, "optical_density", layer.OpticalDensity);
+            json.Number("thickness_um", layer.ThicknessUm);
+            json.Number("coat_weight_g_per_m2", layer.CoatWeightGPerM2);
+            json.Number("optical_density", layer.OpticalDensity);
             json.WriteEndObject();
         }
 
@@ -185,11 +182,11 @@ public static class ReportJson
     private static void Efficiency(Utf8JsonWriter json, FilmEfficiency efficiency)
     {
         json.WriteStartObject("efficiency");
-        Number(json, "blue_leakage_photons", efficiency.BlueLeakagePhotonShare);
-        Number(json, "blue_leakage_power", efficiency.BlueLeakagePowerShare);
-        Number(json, "external_photon", efficiency.ExternalPhotonShare);
-        Number(json, "down_conversion", efficiency.DownConversionShare);
-        Number(json, "energy", efficiency.EnergyShare);
+        json.Number("blue_leakage_photons", efficiency.BlueLeakagePhotonShare);
+        json.Number("blue_leakage_power", efficiency.BlueLeakagePowerShare);
+        json.Number("external_photon", efficiency.ExternalPhotonShare);
+        json.Number("down_conversion", efficiency.DownConversionShare);
+        json.Number("energy", efficiency.EnergyShare);
         json.WriteEndObject();
     }
 
@@ -216,8 +213,8 @@ public static class ReportJson
     private static void Accuracy(Utf8JsonWriter json, SolverAccuracy accuracy)
     {
         json.WriteStartObject("accuracy");
-        Number(json, "asked", accuracy.AskedShare);
-        Number(json, "estimate", accuracy.EstimateShare);
+        json.Number("asked", accuracy.AskedShare);
+        json.Number("estimate", accuracy.EstimateShare);
         json.WriteNumber("ordinates", accuracy.Ordinates);
         json.WriteNumber("cells", accuracy.Cells);
         json.WriteNumber("wavelength_bins", accuracy.WavelengthBins);
@@ -239,10 +236,10 @@ public static class ReportJson
     {
         json.WriteStartObject("haze");
         json.WriteNumber("wavelength_nm", haze.WavelengthNm);
-        Number(json, "total_transmittance", haze.TotalTransmittanceShare);
-        Number(json, "haze", haze.HazeShare);
-        Number(json, "total_transmittance_error", haze.TotalTransmittanceErrorShare);
-        Number(json, "haze_error", haze.HazeErrorShare);
+        json.Number("total_transmittance", haze.TotalTransmittanceShare);
+        json.Number("haze", haze.HazeShare);
+        json.Number("total_transmittance_error", haze.TotalTransmittanceErrorShare);
+        json.Number("haze_error", haze.HazeErrorShare);
         json.WriteEndObject();
     }
 
@@ -253,9 +250,9 @@ public static class ReportJson
         {
             json.WriteStartObject();
             json.WriteString("name", colour.Name);
-            Number(json, "photons", colour.Photons);
-            Number(json, "radius_50_mm", colour.Radius50Mm);
-            Number(json, "radius_90_mm", colour.Radius90Mm);
+            json.Number("photons", colour.Photons);
+            json.Number("radius_50_mm", colour.Radius50Mm);
+            json.Number("radius_90_mm", colour.Radius90Mm);
             json.WriteEndObject();
         }
 
@@ -272,8 +269,8 @@ public static class ReportJson
     private static void Edge(Utf8JsonWriter json, SheetEdge edge)
     {
         json.WriteStartObject("edge_loss");
-        Number(json, "width_mm", edge.LostWidthMm);
-        Number(json, "width_error_mm", edge.LostWidthErrorMm);
+        json.Number("width_mm", edge.LostWidthMm);
+        json.Number("width_error_mm", edge.LostWidthErrorMm);
         json.WriteEndObject();
         json.WriteStartObject("edge");
         List(json, "distance_mm", edge.Bands.Select(band => (double?)band.DistanceMm));
@@ -301,29 +298,20 @@ public static class ReportJson
     private static void White(Utf8JsonWriter json, WhitePoint white)
     {
         json.WriteStartObject("white");
-        Number(json, "x", white.Chromaticity.X);
-        Number(json, "y", white.Chromaticity.Y);
-        Number(json, "u_prime", white.Chromaticity.UPrime);
-        Number(json, "v_prime", white.Chromaticity.VPrime);
-        Number(json, "cct_k", white.CctKelvin);
-        Number(json, "duv", white.Duv);
+        json.Number("x", white.Chromaticity.X);
+        json.Number("y", white.Chromaticity.Y);
+        json.Number("u_prime", white.Chromaticity.UPrime);
+        json.Number("v_prime", white.Chromaticity.VPrime);
+        json.Number("cct_k", white.CctKelvin);
+        json.Number("duv", white.Duv);
         json.WriteEndObject();
     }
 
     private static void Colour(Utf8JsonWriter json, string key, Chromaticity colour)
     {
         json.WriteStartObject(key);
-        Number(json, "x", colour.X);
-        Number(json, "y", colour.Y);
+        json.Number("x", colour.X);
+        json.Number("y", colour.Y);
         json.WriteEndObject();
-    }
-
-    // The writer refuses NaN and infinity itself: neither ever passes for a number.
-    private static void Number(Utf8JsonWriter json, string key, double? value)
-    {
-        if (value is { } number)
-            json.WriteNumber(key, number);
-        else
-            json.WriteNull(key);
     }
 }

@@ -27,10 +27,7 @@ public static class ScatterJson
             json.WriteNumber("total_transmittance", estimate.Reading.TotalTransmittanceShare);
             json.WriteNumber("haze", estimate.Reading.HazeShare);
             json.WriteEndObject();
-            json.WriteStartArray("warnings");
-            foreach (string warning in estimate.Warnings)
-                json.WriteStringValue(warning);
-            json.WriteEndArray();
+            json.Sentences("warnings", estimate.Warnings);
         });
     }
 }

@@ -8,7 +8,7 @@ namespace FilmOptics.DiscreteOrdinates;
 /// <param name="largestTailShare">What a table's polynomials may leave out.</param>
 internal sealed class StoredShape(FilmShape shape, bool withAngles, double largestTailShare)
 {
-    // Sums over a spectrum miss about a twentieth of the tail (measured); where little light leaves, that much may change its colour.
+    // Dense films that let little light out miss about a twentieth of the tail (measured), and that much may change its colour.
     private const double TailPerLight = 100;
 
     // a₀ × thickness and nodes, tried in this order: most films are smooth on the first, bright cavities and clear hosts on a later one.
